@@ -1,0 +1,18 @@
+import { ModalsProvider } from '@mantine/modals';
+import { Notifications } from '@mantine/notifications';
+import type { QueryClient } from '@tanstack/react-query';
+import { useEffect, type ReactNode } from 'react';
+import { onSignedOut } from '../lib/api';
+import { sessionQuery } from '../queries/session';
+import { BaseProviders } from './base-providers';
+
+/** Everything the signed-in application stands on. */
+export function AppProviders({ client, children }: { client: QueryClient; children: ReactNode }) {
+  useEffect(() => onSignedOut(() => client.setQueryData(sessionQuery.queryKey, null)), [client]);
+  return (
+    <BaseProviders client={client}>
+      <ModalsProvider labels={{ confirm: 'Yes', cancel: 'Keep' }}>{children}</ModalsProvider>
+      <Notifications position="bottom-right" limit={4} autoClose={6000} />
+    </BaseProviders>
+  );
+}

@@ -1,0 +1,5 @@
+import { PageHead } from '../../components/page-head';
+
+export function DeskPage() {
+  return <PageHead title="Desk" />;
+}

@@ -1,0 +1,5 @@
+import { PageHead } from '../../components/page-head';
+
+export function FieldsPage() {
+  return <PageHead title="Fields" />;
+}

@@ -1,0 +1,5 @@
+import { Skeleton } from '@mantine/core';
+
+export function ReviewEntryPage() {
+  return <Skeleton height={320} />;
+}
