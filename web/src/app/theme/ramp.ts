@@ -89,9 +89,11 @@ export function lightColour(share: number): string {
   return `rgb(${r} ${g} ${b})`;
 }
 
-/** Ink that is readable on the colour of that share. */
+/** Black or white, whichever stands out more on the colour of that share (at least 4.5:1). */
 export function lightInk(share: number): string {
-  return oklab(lightRgb(share))[0] > 0.6 ? '#1F2A2E' : '#FFFDF9';
+  const [r, g, b] = lightRgb(share).map(toLinear);
+  const luminance = 0.2126 * r + 0.7152 * g + 0.0722 * b;
+  return luminance > 0.179 ? '#000000' : '#FFFFFF';
 }
 
 /** CSS custom properties `--fl-light-0` (dark) to `--fl-light-10` (bright) and the whole gradient. */
