@@ -12,7 +12,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
 import { signOut } from '../../queries/session';
 import classes from './account-menu.module.css';
-import { forgetRecent } from './recent';
+import { forgetRecent } from '../../lib/recent';
 import { useShortcutsAllowed } from './use-jump-keys';
 
 function initials(name: string): string {

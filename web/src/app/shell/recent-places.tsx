@@ -1,5 +1,5 @@
 import { Link } from 'react-router-dom';
-import { useRecent } from './recent';
+import { useRecent } from '../../lib/recent';
 import classes from './recent-places.module.css';
 
 /** The fields opened lately, one step away. */

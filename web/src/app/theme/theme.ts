@@ -4,6 +4,7 @@ import {
   type CSSVariablesResolver,
   type MantineColorsTuple,
 } from '@mantine/core';
+import { components } from './components';
 import { dark, light, type Palette } from './palette';
 import { rampVariables } from './ramp';
 
@@ -83,6 +84,7 @@ const ink: MantineColorsTuple = [
 export const schemeManager = localStorageColorSchemeManager({ key: 'furrowlight-scheme' });
 
 export const theme = createTheme({
+  components,
   colors: { leaf, soil, dusk, straw, danger, ink, red: danger, dark: ink },
   primaryColor: 'leaf',
   primaryShade: { light: 7, dark: 4 },

@@ -6,7 +6,7 @@ import { useNavigate } from 'react-router-dom';
 import { farmListQuery } from '../../../queries/farms';
 import { fieldListQuery } from '../../../queries/fields';
 import { scenarioListQuery } from '../../../queries/scenarios';
-import { useRecent } from '../recent';
+import { useRecent } from '../../../lib/recent';
 import classes from './command-palette.module.css';
 import { entriesFor, matches, scenarioEntry, type Entry } from './entries';
 

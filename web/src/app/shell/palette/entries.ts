@@ -2,7 +2,7 @@ import type { Farm } from '@furrowlight/shared/contract/farms';
 import type { Field } from '@furrowlight/shared/contract/fields';
 import type { Scenario } from '@furrowlight/shared/contract/scenarios';
 import { NAV, NAV_MORE } from '../nav-items';
-import type { Recent } from '../recent';
+import type { Recent } from '../../../lib/recent';
 
 export interface Entry {
   id: string;
