@@ -8,7 +8,7 @@ const STRIPS = 10;
 
 /** Share of light across one pitch for the drawing: darkest under the panel, bright in the alley. */
 function share(position: number): number {
-  return 0.56 - 0.42 * Math.cos(2 * Math.PI * (position - 0.12));
+  return 0.58 + 0.4 * Math.cos(2 * Math.PI * (position - 0.08));
 }
 
 function ray(x: number): string {
@@ -17,7 +17,7 @@ function ray(x: number): string {
 
 function ground() {
   const strips = [];
-  for (let row = -5; row < 5; row += 1) {
+  for (let row = -16; row < 16; row += 1) {
     for (let strip = 0; strip < STRIPS; strip += 1) {
       const from = (row + strip / STRIPS) * PITCH;
       const to = (row + (strip + 1) / STRIPS) * PITCH + 2;
@@ -40,17 +40,18 @@ function along(x: number, y: number, t: number): string {
 
 function row(index: number) {
   const foot = index * PITCH;
+  const side = 34;
   return (
     <g key={index}>
       {[0.14, 0.2, 0.29, 0.42, 0.61, 0.88].map((t) => (
         <path
           key={t}
-          d={`M${along(foot, 0, t)}L${along(foot, -330, t)}`}
+          d={`M${along(foot, 0, t)}L${along(foot, -322, t)}`}
           className={classes.post}
         />
       ))}
       <path
-        d={`M${along(foot - 75, -275, 0.1)}L${along(foot - 75, -275, 1.6)} ${along(foot + 75, -385, 1.6)} ${along(foot + 75, -385, 0.1)}z`}
+        d={`M${along(foot - side, -300, 0.09)}L${along(foot - side, -300, 1.9)} ${along(foot + side, -345, 1.9)} ${along(foot + side, -345, 0.09)}z`}
         className={classes.panel}
       />
     </g>
@@ -78,7 +79,7 @@ export function FurrowArt() {
       <circle cx={VANISH.x + 96} cy={VANISH.y} r="58" fill={lightColour(1)} />
       <rect y={VANISH.y} width="600" height={BOTTOM - VANISH.y} fill={lightColour(0.3)} />
       {ground()}
-      {[-3, 3, -2, 2, -1, 1, 0].map(row)}
+      {[-4.5, 4.5, -3.5, 3.5, -2.5, 2.5, -1.5, 1.5, -0.5, 0.5].map(row)}
     </svg>
   );
 }

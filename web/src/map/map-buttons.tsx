@@ -1,0 +1,69 @@
+import { ActionIcon, Tooltip } from '@mantine/core';
+import { IconFocus2, IconMinus, IconPlus } from '@tabler/icons-react';
+import L, { type LatLngBoundsExpression } from 'leaflet';
+import { useEffect, useRef, useState } from 'react';
+import { useMap, useMapEvents } from 'react-leaflet';
+import classes from './base-map.module.css';
+
+/** Metres of a round number that fit in about 96 px at the map's middle, and their width. */
+function scaleBar(map: L.Map): { metres: number; width: number } {
+  const y = map.getSize().y / 2;
+  const across = map.distance(
+    map.containerPointToLatLng([0, y]),
+    map.containerPointToLatLng([96, y]),
+  );
+  if (!(across > 0)) return { metres: 0, width: 0 };
+  const power = 10 ** Math.floor(Math.log10(across));
+  const metres = [5, 2, 1].map((n) => n * power).find((n) => n <= across) ?? power;
+  return { metres, width: (96 * metres) / across };
+}
+
+/** Zoom, back to all, and a scale bar; large enough for thumbs. */
+export function MapButtons({ home }: { home?: LatLngBoundsExpression }) {
+  const map = useMap();
+  const box = useRef<HTMLDivElement>(null);
+  const [scale, setScale] = useState(() => scaleBar(map));
+  useMapEvents({
+    moveend: () => setScale(scaleBar(map)),
+    zoomend: () => setScale(scaleBar(map)),
+    resize: () => setScale(scaleBar(map)),
+  });
+  useEffect(() => {
+    if (box.current) {
+      L.DomEvent.disableClickPropagation(box.current);
+      L.DomEvent.disableScrollPropagation(box.current);
+    }
+  }, []);
+  const button = (label: string, icon: React.ReactNode, onClick: () => void) => (
+    <Tooltip label={label} position="left">
+      <ActionIcon
+        variant="default"
+        size={40}
+        aria-label={label}
+        onClick={onClick}
+        className={classes.button}
+      >
+        {icon}
+      </ActionIcon>
+    </Tooltip>
+  );
+  return (
+    <>
+      <div ref={box} className={classes.buttons}>
+        {button('Closer', <IconPlus size={18} stroke={1.7} />, () => map.zoomIn(1))}
+        {button('Farther', <IconMinus size={18} stroke={1.7} />, () => map.zoomOut(1))}
+        {home &&
+          button('Show all', <IconFocus2 size={18} stroke={1.7} />, () =>
+            map.fitBounds(L.latLngBounds(home as L.LatLngBoundsLiteral), {
+              padding: [32, 32],
+              maxZoom: 17,
+            }),
+          )}
+      </div>
+      <div className={classes.scale} aria-hidden>
+        <span style={{ width: scale.width }} />
+        {scale.metres >= 1000 ? `${scale.metres / 1000} km` : `${scale.metres} m`}
+      </div>
+    </>
+  );
+}
