@@ -41,7 +41,7 @@ export function BaseMap({ label, bounds, center, zoom, children, className }: Pr
         <Tiles onMissing={setGrid} />
         {grid && <MetreGrid />}
         <MapSize />
-        <MapButtons home={bounds} />
+        <MapButtons home={bounds} grid={grid} />
         {children}
       </MapContainer>
     </div>

@@ -89,24 +89,6 @@ class GridLayer extends L.Layer {
       const y = Math.round(map.latLngToContainerPoint([at, northWest.lng]).y + pad.y) + 0.5;
       line(isStrong, 0, y, full.x, y);
     }
-    this.label(context, grid.step, pad, map.getSize(), style.getPropertyValue('--fl-ink-soft'));
-  }
-
-  private label(
-    context: CanvasRenderingContext2D,
-    step: number,
-    pad: L.Point,
-    size: L.Point,
-    colour: string,
-  ): void {
-    const name = (metres: number) => (metres >= 1000 ? `${metres / 1000} km` : `${metres} m`);
-    context.font = "500 12px 'Work Sans', sans-serif";
-    context.fillStyle = colour;
-    context.fillText(
-      `grid ${name(step)}, strong lines ${name(step * 5)}`,
-      pad.x + 12,
-      pad.y + size.y - 38,
-    );
   }
 }
 

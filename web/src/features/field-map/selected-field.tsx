@@ -1,0 +1,44 @@
+import type { Field } from '@furrowlight/shared/contract/fields';
+import { Button, Group } from '@mantine/core';
+import { Link } from 'react-router-dom';
+import { bearing, hectares, withUnit } from '../../lib/format';
+import classes from './browse-panel.module.css';
+
+/** The chosen field in three facts and the next step. */
+export function SelectedField({ field }: { field: Field }) {
+  const { geometry } = field;
+  return (
+    <section className={classes.card} aria-label={`Chosen: ${field.name}`}>
+      <h2>{field.name}</h2>
+      <p className="tabular">
+        {geometry
+          ? `${hectares(geometry.areaM2)}, longest side ${withUnit(geometry.longestSideM, 'm')} at ${bearing(geometry.longestSideBearingDeg)}`
+          : 'Only a pin so far; rows need a boundary to lie in.'}
+      </p>
+      <Group gap="xs">
+        <Button component={Link} to={`/fields/${field.id}`} size="sm">
+          Open the field
+        </Button>
+        {geometry ? (
+          <Button
+            component={Link}
+            to={`/fields/${field.id}/scenarios/new`}
+            size="sm"
+            variant="default"
+          >
+            Lay rows
+          </Button>
+        ) : (
+          <Button
+            component={Link}
+            to={`/fields/${field.id}?edit=boundary`}
+            size="sm"
+            variant="default"
+          >
+            Draw the boundary
+          </Button>
+        )}
+      </Group>
+    </section>
+  );
+}
