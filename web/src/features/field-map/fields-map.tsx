@@ -7,7 +7,6 @@ import { usePalette } from '../../map/use-palette';
 import type { AddMode } from './add/add-mode';
 import { PinLayer } from './add/pin-layer';
 import { BoundaryLayer } from './boundary/boundary-layer';
-import { isComplete } from './boundary/shape';
 import type { BoundaryEditor } from './boundary/use-boundary-editor';
 import { FieldsLayer, FlyToSelected } from './fields-layer';
 import { FitTo } from './fit-to';
@@ -20,7 +19,6 @@ interface Props {
   onSelect: (id: string) => void;
   mode: AddMode | null;
   editor: BoundaryEditor;
-  cutting: boolean;
   pin: LonLat | null;
   onPin: (pin: LonLat) => void;
   importing: readonly ReadPolygon[];
@@ -45,7 +43,6 @@ export function FieldsMap(props: Props) {
     () => fields.flatMap((field) => field.boundary?.coordinates.flat() ?? []),
     [fields],
   );
-  const drawn = isComplete(editor.shape);
   return (
     <BaseMap label="Map of the fields" bounds={home ?? undefined} className={props.className}>
       <FieldsLayer
@@ -57,11 +54,7 @@ export function FieldsMap(props: Props) {
       />
       {!mode && <FlyToSelected field={fields.find(({ id }) => id === props.selectedId)} />}
       {(mode === 'draw' || mode === 'type') && (
-        <BoundaryLayer
-          editor={editor}
-          drawing={mode === 'draw' && (!drawn || props.cutting)}
-          snapTo={snapTo}
-        />
+        <BoundaryLayer editor={editor} taps={mode === 'draw'} snapTo={snapTo} />
       )}
       {mode === 'pin' && <PinLayer pin={props.pin} onPin={props.onPin} />}
       {mode === 'import' &&

@@ -27,7 +27,6 @@ export function FieldsPage() {
   const fields = useQuery(fieldListQuery());
   const farms = useQuery(farmListQuery);
   const editor = useBoundaryEditor('boundary:new', EMPTY);
-  const [cutting, setCutting] = useState(false);
   const [importing, setImporting] = useState<ReadPolygon[]>([]);
   const [pin, setPin] = useState<[number, number] | null>(null);
 
@@ -86,7 +85,7 @@ export function FieldsPage() {
         )}
       </PageHead>
       {fields.isError && <ErrorPanel error={fields.error} onRetry={() => void fields.refetch()} />}
-      <div className={classes.split} data-adding={mode ? true : undefined}>
+      <div className={classes.split} data-adding={mode ?? undefined}>
         <div className={classes.side}>
           {mode ? (
             <AddPanel
@@ -94,8 +93,6 @@ export function FieldsPage() {
               onMode={(next) => change({ add: next })}
               onClose={() => change({ add: null })}
               editor={editor}
-              cutting={cutting}
-              onCut={setCutting}
               pin={pin}
               onPin={setPin}
               importing={importing}
@@ -129,7 +126,6 @@ export function FieldsPage() {
               onSelect={(id) => change({ field: id })}
               mode={mode}
               editor={editor}
-              cutting={cutting}
               pin={pin}
               onPin={setPin}
               importing={importing}

@@ -20,8 +20,6 @@ interface Props {
   onMode: (mode: AddMode) => void;
   onClose: () => void;
   editor: BoundaryEditor;
-  cutting: boolean;
-  onCut: (cutting: boolean) => void;
   pin: LonLat | null;
   onPin: (pin: LonLat | null) => void;
   importing: readonly ReadPolygon[];
@@ -43,7 +41,6 @@ export function AddPanel(props: Props) {
   const boundary = boundaryOf(editor.shape);
   const finish = () => {
     editor.restart(EMPTY);
-    props.onCut(false);
     props.onPin(null);
     props.onClose();
   };
@@ -56,12 +53,12 @@ export function AddPanel(props: Props) {
         value={mode}
         onChange={(value) => props.onMode(value as AddMode)}
       />
-      {mode === 'draw' && <DrawTools editor={editor} cutting={props.cutting} onCut={props.onCut} />}
+      {mode === 'draw' && <DrawTools editor={editor} />}
       {mode === 'type' &&
         (editor.shape.rings.length === 0 ? (
           <FirstCorner editor={editor} fields={props.fields} />
         ) : (
-          <DrawTools editor={editor} cutting={props.cutting} onCut={props.onCut} />
+          <DrawTools editor={editor} />
         ))}
       {(mode === 'draw' || mode === 'type') && editor.shown.rings.length > 0 && (
         <>

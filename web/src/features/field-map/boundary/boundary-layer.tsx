@@ -5,14 +5,14 @@ import { Polygon, Polyline, useMap, useMapEvents } from 'react-leaflet';
 import { toPair } from '../../../map/lat-lng';
 import { usePalette } from '../../../map/use-palette';
 import { CornerHandles } from './corner-handles';
-import { addCorner, closeRing, openRing } from './shape';
+import { addCorner, openRing } from './shape';
 import { snapped } from './snap';
 import type { BoundaryEditor } from './use-boundary-editor';
 
 interface Props {
   editor: BoundaryEditor;
-  /** A tap on the ground adds a corner. */
-  drawing: boolean;
+  /** Taps on the ground may add corners. */
+  taps: boolean;
   /** Corners of neighbouring fields that a new corner joins when it comes close. */
   snapTo: readonly LonLat[];
 }
@@ -20,7 +20,7 @@ interface Props {
 const CLOSE_PX = 16;
 
 /** The boundary under work: its lines, its handles and the taps that make it. */
-export function BoundaryLayer({ editor, drawing, snapTo }: Props) {
+export function BoundaryLayer({ editor, taps, snapTo }: Props) {
   const palette = usePalette();
   const { shown } = editor;
   const closed = shown.rings.filter((ring) => ring.closed);
@@ -46,14 +46,14 @@ export function BoundaryLayer({ editor, drawing, snapTo }: Props) {
           pathOptions={{ color: palette.ink, weight: 2.5 }}
         />
       )}
-      {drawing && <DrawTaps editor={editor} snapTo={snapTo} />}
+      {taps && editor.drawing && <DrawTaps editor={editor} snapTo={snapTo} />}
       <CornerHandles editor={editor} snapTo={snapTo} />
     </>
   );
 }
 
 /** Adds a corner per tap, draws the next side to the pointer and closes on the first corner. */
-function DrawTaps({ editor, snapTo }: Omit<Props, 'drawing'>) {
+function DrawTaps({ editor, snapTo }: Omit<Props, 'taps'>) {
   const map = useMap();
   const palette = usePalette();
   const [pointer, setPointer] = useState<L.LatLng | null>(null);
@@ -79,7 +79,7 @@ function DrawTaps({ editor, snapTo }: Omit<Props, 'drawing'>) {
     click: ({ latlng, containerPoint }) => {
       const first = corners.length >= 3 && map.latLngToContainerPoint(toPair(corners[0]));
       if (first && first.distanceTo(containerPoint) <= CLOSE_PX) {
-        editor.edit(closeRing(editor.shape));
+        editor.finish();
       } else editor.edit(addCorner(editor.shape, snapped(map, latlng, snapTo)));
     },
   });

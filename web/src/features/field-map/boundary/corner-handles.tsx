@@ -5,7 +5,7 @@ import { Marker, useMap, useMapEvents } from 'react-leaflet';
 import { toPair } from '../../../map/lat-lng';
 import { cornerIcon, middleIcon } from './corner-icons';
 import { shifted } from './measure';
-import { closeRing, insertCorner, moveCorner, removeCorner, type CornerRef } from './shape';
+import { insertCorner, moveCorner, removeCorner, type CornerRef } from './shape';
 import { snapped } from './snap';
 import type { BoundaryEditor } from './use-boundary-editor';
 
@@ -133,7 +133,7 @@ function Corner({ handle, editor, snapTo }: Props & { handle: Handle }) {
         drag: () => editor.preview(moved()),
         dragend: () => editor.edit(moved()),
         click: () => {
-          if (open && corner === 0) editor.edit(closeRing(editor.shape));
+          if (open && corner === 0) editor.finish();
           else editor.activate(ref);
         },
       }}

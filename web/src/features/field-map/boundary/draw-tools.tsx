@@ -8,19 +8,12 @@ import {
   IconTrash,
 } from '@tabler/icons-react';
 import classes from './boundary-panel.module.css';
-import { closeRing, dropLastCorner, EMPTY, isComplete, openRing, removeRing } from './shape';
+import { dropLastCorner, EMPTY, isComplete, openRing, removeRing } from './shape';
 import type { BoundaryEditor } from './use-boundary-editor';
 
-interface Props {
-  editor: BoundaryEditor;
-  /** True while a cut-out is asked for but has no corner yet. */
-  cutting: boolean;
-  onCut: (cutting: boolean) => void;
-}
-
 /** Finish, take back, start over: everything drawing needs, as buttons a thumb can hit. */
-export function DrawTools({ editor, cutting, onCut }: Props) {
-  const { shape } = editor;
+export function DrawTools({ editor }: { editor: BoundaryEditor }) {
+  const { shape, cutting } = editor;
   const index = openRing(shape);
   const open = index >= 0 ? shape.rings[index] : null;
   const complete = isComplete(shape);
@@ -35,10 +28,7 @@ export function DrawTools({ editor, cutting, onCut }: Props) {
             <Button
               leftSection={<IconCheck size={16} />}
               disabled={open.corners.length < 3}
-              onClick={() => {
-                editor.edit(closeRing(shape));
-                onCut(false);
-              }}
+              onClick={editor.finish}
             >
               Finish
             </Button>
@@ -55,7 +45,7 @@ export function DrawTools({ editor, cutting, onCut }: Props) {
           <Button
             variant="default"
             leftSection={<IconCut size={16} stroke={1.6} />}
-            onClick={() => onCut(!cutting)}
+            onClick={() => editor.cut(!cutting)}
             aria-pressed={cutting}
           >
             {cutting ? 'No cut-out' : 'Cut out a part'}

@@ -2,7 +2,7 @@ import { useHotkeys } from '@mantine/hooks';
 import { useCallback, useMemo, useState } from 'react';
 import { useDraft } from '../../../lib/use-draft';
 import { redo, startHistory, step, undo } from './history';
-import type { CornerRef, Shape } from './shape';
+import { closeRing, openRing, type CornerRef, type Shape } from './shape';
 
 export interface BoundaryEditor {
   /** The shape of the last finished step. */
@@ -13,7 +13,14 @@ export interface BoundaryEditor {
   canUndo: boolean;
   canRedo: boolean;
   draft: { savedAt: Date | null; restored: boolean };
+  /** A tap on the map adds a corner: while nothing is finished, or for a cut-out. */
+  drawing: boolean;
+  /** A cut-out is asked for. */
+  cutting: boolean;
+  cut: (cutting: boolean) => void;
   edit: (next: Shape) => void;
+  /** Close the ring being drawn. */
+  finish: () => void;
   preview: (shape: Shape | null) => void;
   activate: (corner: CornerRef | null) => void;
   undo: () => void;
@@ -32,6 +39,7 @@ export function useBoundaryEditor(key: string, initial: Shape): BoundaryEditor {
   const [history, setHistory] = useState(() => startHistory(value));
   const [preview, setPreview] = useState<Shape | null>(null);
   const [active, activate] = useState<CornerRef | null>(null);
+  const [cutting, cut] = useState(false);
 
   const move = useCallback(
     (next: typeof history) => {
@@ -55,10 +63,17 @@ export function useBoundaryEditor(key: string, initial: Shape): BoundaryEditor {
       shape: history.present,
       shown: preview ?? history.present,
       active,
+      drawing: history.present.rings.length === 0 || openRing(history.present) >= 0 || cutting,
+      cutting,
+      cut,
       canUndo: history.past.length > 0,
       canRedo: history.future.length > 0,
       draft: { savedAt, restored },
       edit: (next) => move(step(history, next)),
+      finish: () => {
+        move(step(history, closeRing(history.present)));
+        cut(false);
+      },
       preview: setPreview,
       activate,
       undo: back,
@@ -67,9 +82,10 @@ export function useBoundaryEditor(key: string, initial: Shape): BoundaryEditor {
         setHistory(startHistory(from));
         setPreview(null);
         activate(null);
+        cut(false);
         clear(from);
       },
     }),
-    [history, preview, active, savedAt, restored, move, back, forth, clear],
+    [history, preview, active, cutting, savedAt, restored, move, back, forth, clear],
   );
 }
