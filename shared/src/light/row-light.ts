@@ -1,12 +1,12 @@
 import { prepareBeamShade } from './rows/beam.js';
 import {
   prepareEndlessRows,
-  type Balance,
   type EndlessRows,
   type EndlessRowsInput,
   type PanelLight,
 } from './rows/endless.js';
 import { planeFactor, type RowGeometry } from './rows/geometry.js';
+import type { Balance } from './rows/reflections.js';
 
 /** Light under rows that stand still or turn, at one canopy height, for one sun after another. */
 export interface RowLight {

@@ -1,0 +1,95 @@
+import type { CropBudget } from '../contract/result.js';
+import type { RunCrop } from '../contract/run.js';
+import {
+  extraterrestrialDaily,
+  referenceEvapotranspiration,
+  windAt2m,
+} from '../crops/evapotranspiration.js';
+import { yieldBand } from '../crops/response.js';
+import { periodBudget, type LightSums } from '../light/budget.js';
+import type { RunState } from './state.js';
+
+/** Height at which weather files give wind, m (WMO). */
+const WIND_HEIGHT_M = 10;
+
+/** Share of open-field PAR over a crop's weighted windows; the whole season where none is given. */
+export function weightedShare(crop: RunCrop, sums: LightSums): number {
+  const windows = crop.stages.filter((stage) => stage.weight > 0);
+  const used = windows.length > 0 ? windows : [{ ...crop, weight: 1 }];
+  let received = 0;
+  let open = 0;
+  for (const { firstDay, days, weight } of used) {
+    const budget = periodBudget(sums, '', firstDay, days);
+    received += weight * budget.meanDli * days;
+    open += weight * budget.openDli * days;
+  }
+  return open > 0 ? received / open : 1;
+}
+
+/** Reference evapotranspiration over a season in open field and under the rows, mm. */
+function seasonWater(state: RunState, crop: RunCrop, sums: LightSums) {
+  const { weather, site } = state.input;
+  let openMm = 0;
+  let shadedMm = 0;
+  for (let n = 0; n < crop.days; n += 1) {
+    const day = (crop.firstDay + n) % state.days;
+    const hours = weather.temperatureC.slice(day * 24, day * 24 + 24);
+    const wind = weather.windMs.slice(day * 24, day * 24 + 24);
+    const solarMj = weather.ghi
+      .slice(day * 24, day * 24 + 24)
+      .reduce((sum, value) => sum + (value * 3600) / 1e6, 0);
+    const base = {
+      latitudeDeg: site.latitude,
+      elevationM: site.elevationM,
+      dayOfYear: day + 1,
+      maxC: Math.max(...hours),
+      minC: Math.min(...hours),
+      vapourKpa: null,
+      wind2m: windAt2m(wind.reduce((sum, value) => sum + value, 0) / 24, WIND_HEIGHT_M),
+      solarMj,
+    };
+    const row = day * sums.positions;
+    let under = 0;
+    for (let p = 0; p < sums.positions; p += 1) under += sums.par[row + p];
+    const share = sums.open[day] > 0 ? under / sums.positions / sums.open[day] : 1;
+    const clearness = openClearness(base);
+    openMm += referenceEvapotranspiration(base, 0, clearness);
+    shadedMm += referenceEvapotranspiration({ ...base, solarMj: solarMj * share }, 0, clearness);
+  }
+  return { openMm, shadedMm };
+}
+
+function openClearness(day: {
+  latitudeDeg: number;
+  elevationM: number;
+  dayOfYear: number;
+  solarMj: number;
+}): number {
+  const clear =
+    (0.75 + 2e-5 * day.elevationM) * extraterrestrialDaily(day.latitudeDeg, day.dayOfYear);
+  return clear > 0 ? Math.min(day.solarMj / clear, 1) : 0.5;
+}
+
+/** Light, yield range and water of one crop between sowing and harvest. */
+export function cropBudget(state: RunState, crop: RunCrop): CropBudget {
+  const planeIndex = state.planes.findIndex((plane) => plane.heightM === crop.canopyHeightM);
+  const { sums } = state.planes[planeIndex];
+  const shade = 1 - weightedShare(crop, sums);
+  const water = seasonWater(state, crop, sums);
+  return {
+    seasonId: crop.seasonId,
+    cropId: crop.cropId,
+    cropName: crop.cropName,
+    planeIndex,
+    season: periodBudget(sums, crop.cropName, crop.firstDay, crop.days),
+    stages: crop.stages.map(({ label, firstDay, days, weight, critical, note }) => ({
+      budget: periodBudget(sums, label, firstDay, days),
+      weight,
+      critical,
+      note,
+    })),
+    yield: { ...yieldBand(crop.shadeClass, shade), shade },
+    et0OpenMm: water.openMm,
+    et0ShadedMm: water.shadedMm,
+  };
+}
