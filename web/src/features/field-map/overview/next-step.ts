@@ -12,7 +12,7 @@ export function nextStep(
   field: Field,
   seasonCount: number,
   scenarios: readonly Scenario[],
-): NextStep | null {
+): NextStep {
   const here = `/fields/${field.id}`;
   if (!field.boundary) {
     return {
@@ -54,5 +54,9 @@ export function nextStep(
         .join(',')}`,
     };
   }
-  return null;
+  return {
+    text: `${done[0].name} has a result. Show it to the farmer with a review link, or lay a second scenario beside it.`,
+    label: 'Read the result',
+    to: `${here}/scenarios/${done[0].id}/result`,
+  };
 }

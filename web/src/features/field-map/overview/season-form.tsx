@@ -63,7 +63,8 @@ export function SeasonForm({ fieldId, season, onDone }: Props) {
   const groups = useMemo(() => {
     const byGroup = new Map<string, ComboboxItemGroup<ComboboxItem>>();
     for (const crop of crops.data ?? []) {
-      const group = byGroup.get(crop.group) ?? { group: crop.group, items: [] };
+      const name = crop.group.charAt(0).toUpperCase() + crop.group.slice(1);
+      const group = byGroup.get(crop.group) ?? { group: name, items: [] };
       group.items.push({ value: crop.id, label: crop.name });
       byGroup.set(crop.group, group);
     }
