@@ -1,11 +1,8 @@
-import { DEG } from '../angles.js';
+import { discBelow, SUN_RADIUS } from './disc.js';
 import { panelEndsAbove, type RowGeometry } from './geometry.js';
 
-/** Half the apparent diameter of the sun, radians (0.533 deg across). */
-export const SUN_RADIUS = (0.533 / 2) * DEG;
-
-/** Rows a low sun's disc can be covered by before the rest is called dark. */
-const MOST_ROWS = 600;
+/** Where a half shadow is wider than this many pitches, receivers get the mean over a pitch. */
+const WIDEST_PITCHES = 25;
 
 /** Beam under endless rows at fixed receivers, for one geometry and height. */
 export interface BeamShade {
@@ -15,17 +12,19 @@ export interface BeamShade {
    * @param tangent profileTangent of the sun
    * @param sunAltitude radians, above 0
    * @param out filled, one value a receiver
+   * @param through light left after 0, 1, 2 ... panels, the last value for all beyond; by default
+   *   the powers of the transmittance
    */
-  shares(tangent: number, sunAltitude: number, out: Float64Array): void;
-  /** Panels a point sun's ray crosses on its way to receiver `index`. */
-  crossings(tangent: number, index: number): number;
+  shares(tangent: number, sunAltitude: number, out: Float64Array, through?: Float64Array): void;
 }
 
-/** Share of a uniform disc (radius 1) below a chord at y, -1 to 1. */
-function discBelow(y: number): number {
-  if (y <= -1) return 0;
-  if (y >= 1) return 1;
-  return 0.5 + (y * Math.sqrt(1 - y * y) + Math.asin(y)) / Math.PI;
+/** The sun's disc against the profile: how an angle from its centre counts on the disc. */
+interface DiscView {
+  tangent: number;
+  /** Radii of the disc per sine of the angle between edge and centre, both in the profile. */
+  scale: number;
+  /** Change of the disc's weight per radius, see discBelow. */
+  slope: number;
 }
 
 /**
@@ -34,6 +33,7 @@ function discBelow(y: number): number {
  * A panel throws a shadow interval on the receivers' height; how many intervals cover a receiver is
  * counted exactly. With a disc sun, receivers near an edge see part of the disc: the edge and the
  * receiver span a plane along the row, and the disc is cut by it at the sun's angle from that plane.
+ * Source: own derivation from the plane geometry.
  *
  * @param positions receivers across the rows, m
  * @param z0 receiver height, m
@@ -47,83 +47,118 @@ export function prepareBeamShade(
   discSun: boolean,
 ): BeamShade {
   const ends = panelEndsAbove(geometry, z0);
-  const up1 = ends.z1 - z0;
-  const up2 = ends.z2 - z0;
   const { pitch } = geometry;
+  if (!ends.above || geometry.width === 0)
+    return { shares: (_tangent, _altitude, out) => out.fill(1) };
+  const u1 = ends.u1 / pitch;
+  const u2 = ends.u2 / pitch;
+  const up1 = (ends.z1 - z0) / pitch;
+  const up2 = (ends.z2 - z0) / pitch;
   const count = positions.length;
-  const dark = !ends.above || geometry.width === 0;
+  const places = positions.map((u) => u / pitch);
 
-  const shadow = (tangent: number): [number, number] => {
-    const s1 = ends.u1 - up1 * tangent;
-    const s2 = ends.u2 - up2 * tangent;
-    return s1 < s2 ? [s1, s2] : [s2, s1];
+  /** Chord of the disc, in radii, that an end at x across and `up` above the receiver cuts. */
+  const chord = (x: number, up: number, disc: DiscView): number => {
+    const length = Math.sqrt(x * x + up * up);
+    return length === 0 ? 0 : ((x - up * disc.tangent) / length) * disc.scale;
   };
 
-  /** Exact share for a receiver that sees a panel edge within the disc. */
-  const partial = (u: number, sunAngle: number, radius: number, first: number, last: number) => {
+  /** Share for a receiver that sees ends of rows first to last within the disc. */
+  const partial = (
+    place: number,
+    disc: DiscView,
+    first: number,
+    last: number,
+    through: Float64Array,
+  ): number => {
+    const most = through.length - 1;
+    const end = (k: number, upper: boolean): number => {
+      const y1 = chord(k + u1 - place, up1, disc);
+      const y2 = chord(k + u2 - place, up2, disc);
+      return upper === y1 > y2 ? y1 : y2;
+    };
     let share = 0;
     let from = 0;
     let opened = first;
     let closed = first;
-    const edge = (k: number, upper: boolean): number => {
-      const a1 = Math.atan2(k * pitch + ends.u1 - u, up1);
-      const a2 = Math.atan2(k * pitch + ends.u2 - u, up2);
-      const angle = upper ? Math.max(a1, a2) : Math.min(a1, a2);
-      return discBelow(Math.sin(angle - sunAngle) / radius);
-    };
-    while (closed <= last) {
-      const open = opened <= last ? edge(opened, false) : 2;
-      const close = edge(closed, true);
-      const to = Math.min(open, close);
-      share += (to - from) * Math.pow(transmittance, opened - closed);
+    let nextOpen = end(first, false);
+    let nextClose = end(first, true);
+    while (closed <= last && from < 1) {
+      const opens = opened <= last && nextOpen <= nextClose;
+      const to = discBelow(opens ? nextOpen : nextClose, disc.slope);
+      share += (to - from) * through[Math.min(opened - closed, most)];
       from = to;
-      if (open <= close) opened += 1;
-      else closed += 1;
+      if (opens) {
+        opened += 1;
+        if (opened <= last) nextOpen = end(opened, false);
+      } else {
+        closed += 1;
+        if (closed <= last) nextClose = end(closed, true);
+      }
     }
     return share + (1 - from);
   };
 
-  const shares = (tangent: number, sunAltitude: number, out: Float64Array): void => {
-    if (dark) {
-      out.fill(1);
-      return;
-    }
-    const sunAngle = Math.atan(tangent);
+  const powers = lightThrough(transmittance);
+
+  const shares = (
+    tangent: number,
+    sunAltitude: number,
+    out: Float64Array,
+    through = powers,
+  ): void => {
+    const most = through.length - 1;
+    const cosine = 1 / Math.sqrt(1 + tangent * tangent);
+    const sinAltitude = Math.sin(sunAltitude);
     // The sun's distance from the row direction shrinks its disc's width in the profile.
-    const reach = Math.sin(sunAltitude) / Math.cos(sunAngle);
-    const radius = SUN_RADIUS / reach;
+    const radius = SUN_RADIUS * Math.min(cosine / sinAltitude, 1e6);
     const spread = discSun ? Math.asin(Math.min(radius, 1)) : 0;
     const limit = Math.PI / 2 - 1e-6;
-    const [a1, b1] = shadow(Math.tan(Math.max(sunAngle - spread, -limit)));
-    const [a2, b2] = shadow(Math.tan(Math.min(sunAngle + spread, limit)));
-    const perPitch = 1 / pitch;
+    const angle = Math.atan(tangent);
+    const early = spread === 0 ? tangent : Math.tan(Math.max(angle - spread, -limit));
+    const late = spread === 0 ? tangent : Math.tan(Math.min(angle + spread, limit));
+    // Shadow ends of row 0 for both sides of the disc.
+    const a1 = Math.min(u1 - up1 * early, u2 - up2 * early);
+    const b1 = Math.max(u1 - up1 * early, u2 - up2 * early);
+    const a2 = Math.min(u1 - up1 * late, u2 - up2 * late);
+    const b2 = Math.max(u1 - up1 * late, u2 - up2 * late);
+    if (Math.max(Math.abs(a1 - a2), Math.abs(b1 - b2)) > WIDEST_PITCHES) {
+      out.fill(meanShare(Math.abs(u1 - u2 - (up1 - up2) * tangent), through));
+      return;
+    }
+    const slope = (-SUN_RADIUS * tangent * cosine) / sinAltitude;
+    const disc = { tangent, scale: cosine / radius, slope };
     for (let i = 0; i < count; i += 1) {
-      const u = positions[i];
-      const opensEarly = Math.floor((u - a1) * perPitch);
-      const opensLate = Math.floor((u - a2) * perPitch);
-      const closesEarly = Math.floor((u - b1) * perPitch);
-      const closesLate = Math.floor((u - b2) * perPitch);
+      const place = places[i];
+      const opensEarly = Math.floor(place - a1);
+      const opensLate = Math.floor(place - a2);
+      const closesEarly = Math.floor(place - b1);
+      const closesLate = Math.floor(place - b2);
       if (opensEarly === opensLate && closesEarly === closesLate) {
-        const cover = opensEarly - closesEarly;
-        out[i] = cover === 0 ? 1 : Math.pow(transmittance, cover);
+        out[i] = through[Math.min(opensEarly - closesEarly, most)];
       } else {
         const first = Math.min(closesEarly, closesLate);
         const last = Math.max(opensEarly, opensLate);
-        out[i] =
-          last - first > MOST_ROWS
-            ? transmittance === 0
-              ? 0
-              : Math.pow(transmittance, Math.min(opensEarly - closesEarly, opensLate - closesLate))
-            : partial(u, sunAngle, radius, first, last + 1);
+        out[i] = partial(place, disc, first, last + 1, through);
       }
     }
   };
+  return { shares };
+}
 
-  const crossings = (tangent: number, index: number): number => {
-    if (dark) return 0;
-    const [a, b] = shadow(tangent);
-    return Math.floor((positions[index] - a) / pitch) - Math.floor((positions[index] - b) / pitch);
-  };
+/** Mean over a pitch where each row shades `depth` pitches. */
+function meanShare(depth: number, through: Float64Array): number {
+  const full = Math.floor(depth);
+  const most = through.length - 1;
+  const more = through[Math.min(full + 1, most)];
+  return through[Math.min(full, most)] + (depth - full) * (more - through[Math.min(full, most)]);
+}
 
-  return { shares, crossings };
+/** Light left after 0, 1, 2 ... panels, until nothing to speak of is left. */
+export function lightThrough(transmittance: number): Float64Array {
+  const values = [1];
+  while (values[values.length - 1] > 1e-9 && values.length < 400) {
+    values.push(values[values.length - 1] * transmittance);
+  }
+  return Float64Array.from(values);
 }

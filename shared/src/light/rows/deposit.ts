@@ -1,5 +1,5 @@
+import type { Cut } from './elements.js';
 import { planeFactor, type RowGeometry } from './geometry.js';
-import { elementCount, type Cut } from './trace.js';
 
 /**
  * Where a beam first stays: light kept by each element per pitch of unit horizontal light.
@@ -9,20 +9,22 @@ import { elementCount, type Cut } from './trace.js';
  * interval. The sum over all elements is 1.
  *
  * @param tangent profileTangent of the sun
+ * @param kept filled, one value an element
  */
 export function firstKept(
   geometry: RowGeometry,
   transmittance: number,
   cut: Cut,
   tangent: number,
-): Float64Array {
-  const kept = new Float64Array(elementCount(cut));
+  kept: Float64Array,
+): void {
+  kept.fill(0);
   const { pitch, width } = geometry;
   const factor = planeFactor(geometry, tangent);
   const depth = (width * Math.abs(factor)) / pitch;
   const full = Math.floor(depth);
   keepOnGround(kept, geometry, transmittance, cut, tangent, full, depth - full);
-  if (depth === 0) return kept;
+  if (depth === 0) return;
 
   const face = cut.ground + (factor > 0 ? 0 : cut.face);
   for (let strip = 0; strip < cut.face; strip += 1) {
@@ -35,7 +37,6 @@ export function firstKept(
       from = to;
     }
   }
-  return kept;
 }
 
 /** Ground under `full` rows everywhere and under one more over the share `part` of a pitch. */

@@ -1,7 +1,5 @@
 import { InputError, requireWithin } from '../../errors.js';
 import { prepareBeamShade } from './beam.js';
-import { firstKept } from './deposit.js';
-import { prepareExchange } from './exchange.js';
 import {
   planeFactor,
   profileTangent,
@@ -10,9 +8,14 @@ import {
   type RowGeometry,
   type RowOptics,
 } from './geometry.js';
-import { addReceiverView } from './receiver-view.js';
+import {
+  neighbours,
+  prepareReflections,
+  type Balance,
+  type Quality,
+  type Reflections,
+} from './reflections.js';
 import { skyShare } from './sky-view.js';
-import { elementCount, type Cut } from './trace.js';
 
 /** What endless rows are prepared from. */
 export interface EndlessRowsInput {
@@ -25,15 +28,7 @@ export interface EndlessRowsInput {
   /** Soften shadow edges by the sun's disc; default true. */
   discSun?: boolean;
   /** `preview` cuts surfaces and directions more coarsely; default `full`. */
-  quality?: 'full' | 'preview';
-}
-
-/** Where one unit of horizontal light over one pitch of land ends; parts sum to 1. */
-export interface Balance {
-  ground: number;
-  panel: number;
-  escaped: number;
-  structure: number;
+  quality?: Quality;
 }
 
 /** Irradiance of the panel faces per unit horizontal light. */
@@ -64,119 +59,6 @@ export interface EndlessRows {
   litShare(tangent: number): number;
 }
 
-const CUTS = {
-  full: { ground: 32, face: 24, directions: 120 },
-  preview: { ground: 12, face: 8, directions: 36 },
-} satisfies Record<'full' | 'preview', Cut>;
-
-/** Profile angles at which reflections are tabulated, per half turn. */
-const ANGLES = { full: 360, preview: 90 } as const;
-
-/** Table values by profile angle: a row per angle, columns as named. */
-interface ReflectionTable {
-  angles: number;
-  /** Reflected share at receivers, angles x receivers. */
-  receivers: Float64Array;
-  /** ground, panel, escaped; frontReflected, rearReflected (irradiance), angles x 5. */
-  sums: Float64Array;
-}
-
-/** Share of each receiver's upper view that each face strip fills: receivers x strips of both faces. */
-function receiverViews(
-  input: EndlessRowsInput,
-  cut: Cut,
-  quality: 'full' | 'preview',
-): Float64Array {
-  const { geometry, optics, positions, receiverHeight } = input;
-  const strips = 2 * cut.face;
-  const views = new Float64Array(positions.length * strips);
-  for (let i = 0; i < positions.length; i += 1) {
-    const row = views.subarray(i * strips, (i + 1) * strips);
-    const { transmittance } = optics;
-    addReceiverView(geometry, transmittance, cut.face, positions[i], receiverHeight, quality, row);
-  }
-  return views;
-}
-
-function tabulate(input: EndlessRowsInput, quality: 'full' | 'preview'): ReflectionTable {
-  const { geometry, optics, positions } = input;
-  const cut = CUTS[quality];
-  const n = elementCount(cut);
-  const angles = ANGLES[quality];
-  const exchange = prepareExchange(geometry, optics, cut);
-  const views = receiverViews(input, cut, quality);
-  const strips = 2 * cut.face;
-  const stripArea = geometry.width / cut.face;
-  const table: ReflectionTable = {
-    angles,
-    receivers: new Float64Array(angles * positions.length),
-    sums: new Float64Array(angles * 5),
-  };
-  const settled = new Float64Array(n);
-  for (let a = 0; a < angles; a += 1) {
-    const angle = -Math.PI / 2 + ((a + 0.5) / angles) * Math.PI;
-    // Held per unit of light along the profile ray: per unit of horizontal light it would grow
-    // without limit towards the horizon and not bear interpolation.
-    const scale = Math.cos(angle);
-    const first = firstKept(geometry, optics.transmittance, cut, Math.tan(angle));
-    settled.fill(0);
-    for (let j = 0; j < n; j += 1) {
-      for (let i = 0; i < n; i += 1) settled[j] += exchange.settled[j * n + i] * first[i];
-    }
-    let ground = 0;
-    let panel = 0;
-    let escaped = 0;
-    let front = 0;
-    let rear = 0;
-    for (let j = 0; j < n; j += 1) {
-      const absorbed = settled[j] * (1 - exchange.reflected[j]);
-      escaped += settled[j] * exchange.reflected[j] * exchange.escaping[j];
-      if (j < cut.ground) ground += absorbed;
-      else panel += absorbed;
-      const extra = (settled[j] - first[j]) / (1 - optics.transmittance);
-      if (j >= cut.ground && j < cut.ground + cut.face) front += extra;
-      else if (j >= cut.ground + cut.face) rear += extra;
-    }
-    // Elements hold light per pitch of unit light; per area of panel it is x pitch / width.
-    const perArea = geometry.width > 0 ? geometry.pitch / geometry.width : 0;
-    table.sums.set(
-      [ground, panel, escaped, front * perArea, rear * perArea].map((value) => value * scale),
-      a * 5,
-    );
-    for (let r = 0; r < positions.length; r += 1) {
-      let sum = 0;
-      for (let e = 0; e < strips; e += 1) {
-        const j = cut.ground + e;
-        sum += views[r * strips + e] * settled[j] * exchange.reflected[j];
-      }
-      table.receivers[a * positions.length + r] = (sum * geometry.pitch * scale) / stripArea;
-    }
-  }
-  return table;
-}
-
-/** A tangent's two neighbouring table rows with their weights (per unit horizontal light). */
-interface Place {
-  row: number;
-  next: number;
-  low: number;
-  high: number;
-}
-
-function place(table: ReflectionTable, tangent: number): Place {
-  const angle = Math.atan(tangent);
-  const at = (angle / Math.PI + 0.5) * table.angles - 0.5;
-  const row = Math.min(Math.max(Math.floor(at), 0), table.angles - 1);
-  const share = Math.min(Math.max(at - row, 0), 1);
-  const perHorizontal = 1 / Math.cos(angle);
-  return {
-    row,
-    next: Math.min(row + 1, table.angles - 1),
-    low: (1 - share) * perHorizontal,
-    high: share * perHorizontal,
-  };
-}
-
 /** Light of the panel faces straight from a beam, averaged over the slant, per unit horizontal light. */
 function directPanel(geometry: RowGeometry, transmittance: number, tangent: number): number {
   const depth = (geometry.width * Math.abs(planeFactor(geometry, tangent))) / geometry.pitch;
@@ -186,6 +68,36 @@ function directPanel(geometry: RowGeometry, transmittance: number, tangent: numb
   const through =
     (1 - part) * Math.pow(transmittance, full) + part * Math.pow(transmittance, full + 1);
   return ((1 - through) / (1 - transmittance)) * (geometry.pitch / geometry.width);
+}
+
+/** Add the reflected beam at all receivers, times `weight`. */
+function addReflected(
+  { angles, receivers }: Reflections,
+  tangent: number,
+  weight: number,
+  out: Float64Array,
+): void {
+  const { row, next, low, high } = neighbours(angles, tangent);
+  const count = out.length;
+  for (let i = 0; i < count; i += 1) {
+    out[i] += weight * (low * receivers[row * count + i] + high * receivers[next * count + i]);
+  }
+}
+
+function fillPanel(
+  { angles, faces }: Reflections,
+  geometry: RowGeometry,
+  transmittance: number,
+  tangent: number,
+  out: PanelLight,
+): void {
+  const { row, next, low, high } = neighbours(angles, tangent);
+  const direct = directPanel(geometry, transmittance, tangent);
+  const onFront = planeFactor(geometry, tangent) > 0;
+  out.frontReflected = faces[row * 2] * low + faces[next * 2] * high;
+  out.rearReflected = faces[row * 2 + 1] * low + faces[next * 2 + 1] * high;
+  out.front = out.frontReflected + (onFront ? direct : 0);
+  out.rear = out.rearReflected + (onFront ? 0 : direct);
 }
 
 /**
@@ -207,7 +119,7 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
   const quality = input.quality ?? 'full';
   const count = positions.length;
   const open = 1 - optics.structureShade;
-  const table = tabulate(input, quality);
+  const reflections = prepareReflections(input, quality);
   const shade = prepareBeamShade(
     geometry,
     optics.transmittance,
@@ -215,36 +127,6 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
     receiverHeight,
     input.discSun ?? true,
   );
-
-  const addBeamReflected = (tangent: number, weight: number, out: Float64Array): void => {
-    const { row, next, low, high } = place(table, tangent);
-    const a = weight * low * open;
-    const b = weight * high * open;
-    for (let i = 0; i < count; i += 1) {
-      out[i] += a * table.receivers[row * count + i] + b * table.receivers[next * count + i];
-    }
-  };
-
-  const beamPanel = (tangent: number, out: PanelLight): void => {
-    const { row, next, low, high } = place(table, tangent);
-    const { sums } = table;
-    const direct = directPanel(geometry, optics.transmittance, tangent);
-    const onFront = planeFactor(geometry, tangent) > 0;
-    out.frontReflected = sums[row * 5 + 3] * low + sums[next * 5 + 3] * high;
-    out.rearReflected = sums[row * 5 + 4] * low + sums[next * 5 + 4] * high;
-    out.front = out.frontReflected + (onFront ? direct : 0);
-    out.rear = out.rearReflected + (onFront ? 0 : direct);
-  };
-
-  const beamBalance = (tangent: number, out: Balance): void => {
-    const { row, next, low, high } = place(table, tangent);
-    const { sums } = table;
-    const ground = sums[row * 5] * low + sums[next * 5] * high;
-    out.ground = ground * open;
-    out.structure = ground * optics.structureShade;
-    out.panel = sums[row * 5 + 1] * low + sums[next * 5 + 1] * high;
-    out.escaped = 1 - out.ground - out.structure - out.panel;
-  };
 
   const rows: EndlessRows = {
     sky: Float64Array.from(
@@ -259,15 +141,21 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
       shade.shares(tangent, sunAltitude, out);
       if (open < 1) for (let i = 0; i < count; i += 1) out[i] *= open;
     },
-    addBeamReflected,
-    beamPanel,
-    beamBalance,
+    addBeamReflected: (tangent, weight, out) => {
+      addReflected(reflections, tangent, weight, out);
+    },
+    beamPanel: (tangent, out) => {
+      fillPanel(reflections, geometry, optics.transmittance, tangent, out);
+    },
+    beamBalance: (tangent, out) => {
+      reflections.balance(tangent, out);
+    },
     litShare: (tangent) => {
       const depth = (geometry.width * Math.abs(planeFactor(geometry, tangent))) / geometry.pitch;
       return depth <= 1 ? 1 : 1 / depth;
     },
   };
-  addSky(rows, table.angles);
+  addSky(rows, reflections.angles);
   return rows;
 }
 

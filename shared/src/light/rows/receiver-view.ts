@@ -1,92 +1,148 @@
 import { panelEndsAbove, type RowGeometry } from './geometry.js';
 
-/** Panels farther than this many heights fill under 1e-4 (preview) or 4e-6 (full) of the view. */
-const REACH = { full: 350, preview: 70 } as const;
+/** Rows farther than this many heights fill under 2e-3 (preview) or 2e-4 (full) of the view. */
+const REACH = { full: 60, preview: 18 } as const;
+
+/** A row that fills less than this of the view is taken as evenly spread over its strips. */
+const NARROW = 0.02;
+
+/** Light through panels weaker than this is left out of the view. */
+const FAINTEST = 1e-4;
+
+/** View of one receiver, swept row by row; reused for all receivers of a geometry and height. */
+export interface ViewSweep {
+  /**
+   * Add how much of the upper view of the receiver at `u` each strip of the panel faces fills.
+   *
+   * @param out front strips then rear strips, from the upper edge; shares of the view
+   */
+  add(u: number, out: Float64Array): void;
+}
+
+/** Sine of the profile angle of a point at x across and z above the receiver. */
+function sine(x: number, z: number): number {
+  const length = Math.sqrt(x * x + z * z);
+  return length === 0 ? 0 : x / length;
+}
 
 /**
- * How much of a receiver's upper view each strip of the panel faces fills.
+ * Prepare the view of receivers at one height.
  *
  * The view is swept from one horizon to the other by the sine of the profile angle, in which light
  * from an even source is evenly spread. Between two panel ends the same rows cover the view; the
  * nearest is seen whole, those behind through `transmittance` of each before them.
  *
- * @param faceStrips strips per face along the slant, from the upper edge
- * @param u receiver across the rows, m
+ * @param strips per face along the slant
  * @param z0 receiver height, m
- * @param out front strips then rear strips; shares of the view are added
  */
-export function addReceiverView(
+export function prepareViewSweep(
   geometry: RowGeometry,
   transmittance: number,
-  faceStrips: number,
-  u: number,
+  strips: number,
   z0: number,
   quality: 'full' | 'preview',
-  out: Float64Array,
-): void {
+): ViewSweep {
   const ends = panelEndsAbove(geometry, z0);
-  if (!ends.above || geometry.width === 0) return;
-  const { pitch, width, tilt, midHeight } = geometry;
-  const c = Math.cos(tilt);
-  const s = Math.sin(tilt);
-  const rows = Math.min(Math.ceil(((ends.z1 - z0) * REACH[quality]) / pitch) + 2, 4000);
-  const first = Math.round(u / pitch) - rows;
+  if (!ends.above || geometry.width === 0) return { add: () => undefined };
+  const { pitch } = geometry;
+  const up1 = ends.z1 - z0;
+  const up2 = ends.z2 - z0;
+  const c = Math.cos(geometry.tilt);
+  const s = Math.sin(geometry.tilt);
+  const rows = Math.ceil((up1 * REACH[quality]) / pitch) + 2;
   const total = 2 * rows + 1;
+  const upper = new Float64Array(total);
+  const lower = new Float64Array(total);
+  // Part of the slant above the receiver, in strips from the upper edge.
+  const seen = (strips * Math.hypot(ends.u2 - ends.u1, ends.z1 - ends.z2)) / geometry.width;
+  let offset = 0;
 
-  /** Sine of the profile angle of slant coordinate q of row k, clipped at the receiver's height. */
-  const sineOf = (k: number, q: number): number => {
-    const x = (first + k) * pitch + q * c - u;
-    const z = Math.max(midHeight - q * s - z0, 0);
-    const length = Math.sqrt(x * x + z * z);
-    return length === 0 ? 0 : x / length;
+  const atStrip = (k: number, q: number): number => {
+    const share = Math.min(q, seen) / strips;
+    const down = share * geometry.width;
+    return sine(offset + k * pitch + ends.u1 + down * c, Math.max(up1 - down * s, 0));
   };
-  const lowestQ =
-    ends.z2 > z0 + 1e-12 ? width / 2 : Math.min(width / 2, (midHeight - z0) / (s || 1));
-  const low = (k: number) => Math.min(sineOf(k, -width / 2), sineOf(k, lowestQ));
-  const high = (k: number) => Math.max(sineOf(k, -width / 2), sineOf(k, lowestQ));
+
+  /** Spread [from, to] over strips as if the sine ran evenly along the slant. */
+  const spread = (
+    k: number,
+    from: number,
+    to: number,
+    scale: number,
+    base: number,
+    out: Float64Array,
+  ) => {
+    const length = lower[k] - upper[k];
+    const q1 = (seen * (from - upper[k])) / length;
+    const q2 = (seen * (to - upper[k])) / length;
+    const low = Math.max(Math.min(q1, q2), 0);
+    const high = Math.min(Math.max(q1, q2), seen);
+    const perStrip = (scale * Math.abs(length)) / seen;
+    for (let strip = Math.floor(low); strip < high; strip += 1) {
+      const part = Math.min(strip + 1, high) - Math.max(strip, low);
+      if (part > 0) out[base + strip] += part * perStrip;
+    }
+  };
 
   /** Give the part [from, to] of the view to the strips of row k. */
-  const give = (k: number, from: number, to: number, weight: number): void => {
-    const middle = (from + to) / 2;
-    const front = middle * s + Math.sqrt(1 - middle * middle) * c < 0;
-    const base = front ? 0 : faceStrips;
-    let edge = sineOf(k, -width / 2);
-    for (let strip = 0; strip < faceStrips; strip += 1) {
-      const q = Math.min(((strip + 1) / faceStrips - 0.5) * width, lowestQ);
-      const next = sineOf(k, q);
+  const give = (
+    k: number,
+    from: number,
+    to: number,
+    scale: number,
+    base: number,
+    out: Float64Array,
+  ) => {
+    const length = lower[k] - upper[k];
+    if (Math.abs(length) < NARROW) {
+      if (length !== 0) spread(k, from, to, scale, base, out);
+      return;
+    }
+    let edge = upper[k];
+    for (let strip = 0; strip < seen; strip += 1) {
+      const next = atStrip(k, strip + 1);
       const a = Math.max(Math.min(edge, next), from);
       const b = Math.min(Math.max(edge, next), to);
-      if (b > a) out[base + strip] += ((b - a) / 2) * weight;
+      if (b > a) out[base + strip] += (b - a) * scale;
+      if (length > 0 ? next >= to : next <= from) break;
       edge = next;
     }
   };
 
-  let from = -1;
-  let opened = 0;
-  let closed = 0;
-  let nextOpen = low(0);
-  let nextClose = high(0);
-  while (closed < total) {
-    const opens = opened < total && nextOpen <= nextClose;
-    const to = opens ? nextOpen : nextClose;
-    if (to - from > 1e-15) {
-      // Along a ray rows follow each other in order of k; which end is near depends on its lean.
-      const middle = (from + to) / 2;
-      const across = middle * s + Math.sqrt(1 - middle * middle) * c;
-      const rising = across > 0 ? 1 : -1;
-      let weight = 1;
-      for (let n = 0; n < opened - closed && weight > 1e-9; n += 1) {
-        give(rising > 0 ? closed + n : opened - 1 - n, from, to, weight);
-        weight *= transmittance;
-      }
+  /** Share the view [from, to], covered by rows first to last, among them. */
+  const cover = (from: number, to: number, first: number, last: number, out: Float64Array) => {
+    const middle = (from + to) / 2;
+    // Light that reaches the receiver moves against the front normal where this is positive.
+    const across = middle * s + Math.sqrt(1 - middle * middle) * c;
+    const base = across > 0 ? strips : 0;
+    const count = last - first + 1;
+    let scale = 0.5;
+    for (let n = 0; n < count && scale > FAINTEST; n += 1) {
+      give(across > 0 ? first + n : last - n, from, to, scale, base, out);
+      scale *= transmittance;
     }
-    from = Math.max(from, to);
-    if (opens) {
-      opened += 1;
-      nextOpen = opened < total ? low(opened) : Infinity;
-    } else {
-      closed += 1;
-      nextClose = closed < total ? high(closed) : Infinity;
+  };
+
+  const add = (u: number, out: Float64Array): void => {
+    offset = (Math.round(u / pitch) - rows) * pitch - u;
+    for (let k = 0; k < total; k += 1) {
+      const x = offset + k * pitch;
+      upper[k] = sine(x + ends.u1, up1);
+      // An end at the very receiver is seen the way the panel leans.
+      lower[k] = up2 === 0 && x + ends.u2 === 0 ? upper[k] : sine(x + ends.u2, up2);
     }
-  }
+    let from = -1;
+    let opened = 0;
+    let closed = 0;
+    while (closed < total) {
+      const nextOpen = opened < total ? Math.min(upper[opened], lower[opened]) : 2;
+      const nextClose = Math.max(upper[closed], lower[closed]);
+      const to = Math.min(nextOpen, nextClose);
+      if (to > from && opened > closed) cover(from, to, closed, opened - 1, out);
+      from = Math.max(from, to);
+      if (nextOpen <= nextClose) opened += 1;
+      else closed += 1;
+    }
+  };
+  return { add };
 }

@@ -1,0 +1,171 @@
+import { firstKept } from './deposit.js';
+import { elementCount, type Cut } from './elements.js';
+import { prepareExchange, type Exchange } from './exchange.js';
+import type { RowGeometry, RowOptics } from './geometry.js';
+import { prepareViewSweep } from './receiver-view.js';
+
+export type Quality = 'full' | 'preview';
+
+const CUTS = {
+  full: { ground: 32, face: 24, directions: 180 },
+  preview: { ground: 12, face: 8, directions: 60 },
+} satisfies Record<Quality, Cut>;
+
+/** Profile angles at which reflections are tabulated, per half turn. */
+const ANGLES = { full: 360, preview: 120 } as const;
+
+/** Where one unit of horizontal light over one pitch of land ends; parts sum to 1. */
+export interface Balance {
+  ground: number;
+  panel: number;
+  escaped: number;
+  structure: number;
+}
+
+/** Reflected light by profile angle of the beam that causes it. */
+export interface Reflections {
+  angles: number;
+  /** Per receiver and unit of horizontal beam x cos(profile angle): angles x receivers. */
+  receivers: Float64Array;
+  /** On the front and the rear of the panel, in the same measure: angles x 2. */
+  faces: Float64Array;
+  /** Ends of the light of a beam at any tangent, without interpolation. */
+  balance(tangent: number, out: Balance): void;
+}
+
+/** What reflections are prepared from. */
+export interface ReflectionsInput {
+  geometry: RowGeometry;
+  optics: RowOptics;
+  positions: Float64Array;
+  receiverHeight: number;
+}
+
+/** Row vector times matrix: what each element's first kept light comes to, weighed by `weights`. */
+function weigh(weights: Float64Array, settled: Float64Array): Float64Array {
+  const n = weights.length;
+  const out = new Float64Array(n);
+  for (let j = 0; j < n; j += 1) {
+    const weight = weights[j];
+    if (weight === 0) continue;
+    for (let i = 0; i < n; i += 1) out[i] += weight * settled[j * n + i];
+  }
+  return out;
+}
+
+function dot(a: Float64Array, b: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < a.length; i += 1) sum += a[i] * b[i];
+  return sum;
+}
+
+/** For each receiver, the reflected light it gets per unit first kept by each element. */
+function receiverWeights(input: ReflectionsInput, cut: Cut, exchange: Exchange, quality: Quality) {
+  const { geometry, optics, positions, receiverHeight } = input;
+  const { transmittance } = optics;
+  const sweep = prepareViewSweep(geometry, transmittance, cut.face, receiverHeight, quality);
+  const view = new Float64Array(2 * cut.face);
+  const weights = new Float64Array(elementCount(cut));
+  const stripWidth = geometry.width / cut.face;
+  return Array.from(positions, (u) => {
+    view.fill(0);
+    sweep.add(u, view);
+    for (let e = 0; e < view.length; e += 1) {
+      const j = cut.ground + e;
+      weights[j] =
+        view[e] === 0 ? 0 : (view[e] * exchange.reflected[j] * geometry.pitch) / stripWidth;
+    }
+    return weigh(weights, exchange.settled);
+  });
+}
+
+/** Weights of first kept light for irradiance of each face by reflection alone. */
+function faceWeights(input: ReflectionsInput, cut: Cut, exchange: Exchange): Float64Array[] {
+  const { geometry, optics } = input;
+  // Elements hold light per pitch; per area of panel it is x pitch / width.
+  const perArea = geometry.width > 0 ? geometry.pitch / geometry.width : 0;
+  return [cut.ground, cut.ground + cut.face].map((start) => {
+    const weights = new Float64Array(elementCount(cut));
+    weights.fill(perArea / (1 - optics.transmittance), start, start + cut.face);
+    const total = weigh(weights, exchange.settled);
+    return total.map((value, i) => value - weights[i]);
+  });
+}
+
+/** Weights of first kept light for ground (structure included), panels and sky. */
+function balanceWeights(cut: Cut, exchange: Exchange, optics: RowOptics): Float64Array[] {
+  const n = elementCount(cut);
+  const ends = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
+  for (let j = 0; j < n; j += 1) {
+    const back = exchange.reflected[j];
+    if (j < cut.ground) ends[0][j] = (1 - optics.structureShade) * (1 - optics.albedo);
+    else ends[1][j] = 1 - back;
+    ends[2][j] = back * exchange.escaping[j];
+  }
+  return ends.map((weights) => weigh(weights, exchange.settled));
+}
+
+/**
+ * Follow reflections off both faces and the ground for beams from all profile angles.
+ *
+ * Values are held x cos(profile angle): per unit of horizontal light they grow without limit towards
+ * the horizon and would not bear interpolation.
+ */
+export function prepareReflections(input: ReflectionsInput, quality: Quality): Reflections {
+  const { geometry, optics, positions } = input;
+  const cut = CUTS[quality];
+  const angles = ANGLES[quality];
+  const exchange = prepareExchange(geometry, optics, cut);
+  const { transmittance, structureShade } = optics;
+  const atReceivers = receiverWeights(input, cut, exchange, quality);
+  const onFaces = faceWeights(input, cut, exchange);
+  const ends = balanceWeights(cut, exchange, optics);
+  const count = positions.length;
+  const receivers = new Float64Array(angles * count);
+  const faces = new Float64Array(angles * 2);
+  const kept = new Float64Array(elementCount(cut));
+  for (let a = 0; a < angles; a += 1) {
+    const angle = -Math.PI / 2 + ((a + 0.5) / angles) * Math.PI;
+    firstKept(geometry, transmittance, cut, Math.tan(angle), kept);
+    const scale = Math.cos(angle);
+    for (let r = 0; r < count; r += 1) {
+      receivers[a * count + r] = dot(atReceivers[r], kept) * scale * (1 - structureShade);
+    }
+    faces[a * 2] = dot(onFaces[0], kept) * scale;
+    faces[a * 2 + 1] = dot(onFaces[1], kept) * scale;
+  }
+  const balance = (tangent: number, out: Balance): void => {
+    firstKept(geometry, transmittance, cut, tangent, kept);
+    out.ground = dot(ends[0], kept);
+    out.panel = dot(ends[1], kept);
+    out.escaped = dot(ends[2], kept);
+    out.structure = 0;
+    if (structureShade > 0) {
+      const onGround = out.ground / ((1 - structureShade) * (1 - optics.albedo));
+      out.structure = onGround * structureShade;
+    }
+  };
+  return { angles, receivers, faces, balance };
+}
+
+/** A tangent's two neighbours in the table, with weights per unit of horizontal light. */
+export interface Neighbours {
+  row: number;
+  next: number;
+  low: number;
+  high: number;
+}
+
+export function neighbours(angles: number, tangent: number): Neighbours {
+  const angle = Math.atan(tangent);
+  const at = (angle / Math.PI + 0.5) * angles - 0.5;
+  const row = Math.min(Math.max(Math.floor(at), 0), angles - 1);
+  const share = Math.min(Math.max(at - row, 0), 1);
+  const perHorizontal = 1 / Math.cos(angle);
+  return {
+    row,
+    next: Math.min(row + 1, angles - 1),
+    low: (1 - share) * perHorizontal,
+    high: share * perHorizontal,
+  };
+}
