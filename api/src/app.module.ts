@@ -1,0 +1,27 @@
+import { Module, type DynamicModule } from '@nestjs/common';
+import { AuditModule } from './audit/audit.module.js';
+import { AuthModule } from './auth/auth.module.js';
+import { CommonModule } from './common/common.module.js';
+import type { AppConfig } from './config/app-config.js';
+import { ConfigModule } from './config/config.module.js';
+import { CooperativesModule } from './cooperatives/cooperatives.module.js';
+import { DatabaseModule } from './database/database.module.js';
+import { MembersModule } from './members/members.module.js';
+
+@Module({})
+export class AppModule {
+  static with(config: AppConfig): DynamicModule {
+    return {
+      module: AppModule,
+      imports: [
+        ConfigModule.with(config),
+        CommonModule,
+        DatabaseModule,
+        AuthModule,
+        MembersModule,
+        CooperativesModule,
+        AuditModule,
+      ],
+    };
+  }
+}
