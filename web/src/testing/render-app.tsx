@@ -48,7 +48,7 @@ export function renderApp(path: string, options: Options = {}): RenderedApp {
   );
   const router = createMemoryRouter(makeRoutes(client), { initialEntries: [path] });
   const view = render(
-    <AppProviders client={client}>
+    <AppProviders client={client} env="test">
       <RouterProvider router={router} />
     </AppProviders>,
   );

@@ -23,6 +23,7 @@ window.matchMedia = (query: string) => ({
   removeEventListener: () => {},
   dispatchEvent: () => false,
 });
+Object.defineProperty(document, 'fonts', { value: new EventTarget() });
 Element.prototype.scrollIntoView = () => {};
 window.scrollTo = () => {};
 
