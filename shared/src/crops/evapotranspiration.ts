@@ -20,14 +20,32 @@ export const saturationPressure = (celsius: number): number =>
 export const saturationSlope = (celsius: number): number =>
   (4098 * saturationPressure(celsius)) / (celsius + 237.3) ** 2;
 
+/**
+ * Actual vapour pressure from a day's extremes, kPa (eq. 17).
+ *
+ * @param humidMax largest relative humidity, %, taken at the lowest temperature
+ * @param humidMin smallest relative humidity, %, taken at the highest temperature
+ * @throws InputError naming the humidity out of range
+ */
+export function vapourPressure(
+  maxC: number,
+  minC: number,
+  humidMax: number,
+  humidMin: number,
+): number {
+  requireWithin('humidMax', humidMax, 0, 100, '%');
+  requireWithin('humidMin', humidMin, 0, humidMax, '%');
+  return (saturationPressure(minC) * humidMax + saturationPressure(maxC) * humidMin) / 200;
+}
+
 /** Inverse relative distance and declination by day of year (eq. 23, 24). */
-function orbit(dayOfYear: number) {
+export function orbit(dayOfYear: number): { distance: number; declination: number } {
   const angle = (2 * Math.PI * dayOfYear) / 365;
   return { distance: 1 + 0.033 * Math.cos(angle), declination: 0.409 * Math.sin(angle - 1.39) };
 }
 
 /** Sunset hour angle, radians (eq. 25); pi in polar day, 0 in polar night. */
-function sunsetAngle(latitude: number, declination: number): number {
+export function sunsetAngle(latitude: number, declination: number): number {
   return Math.acos(Math.min(Math.max(-Math.tan(latitude) * Math.tan(declination), -1), 1));
 }
 
@@ -80,24 +98,53 @@ export interface DayWeather {
 }
 
 /**
+ * Radiation of a cloudless day, MJ m-2 d-1 (eq. 37).
+ *
+ * @param ra extraterrestrial radiation, MJ m-2 d-1
+ * @param elevationM m
+ */
+export const clearSkyDaily = (ra: number, elevationM: number): number =>
+  (0.75 + 2e-5 * elevationM) * ra;
+
+/** Solar over clear-sky radiation of a day, at most 1; 0.5 in polar night. */
+export function clearnessOf(
+  day: Pick<DayWeather, 'latitudeDeg' | 'elevationM' | 'dayOfYear' | 'solarMj'>,
+): number {
+  const ra = extraterrestrialDaily(day.latitudeDeg, day.dayOfYear);
+  const clear = clearSkyDaily(ra, day.elevationM);
+  return clear > 0 ? Math.min(day.solarMj / clear, 1) : 0.5;
+}
+
+/**
+ * Net heat radiation lost to the sky, MJ m-2 d-1 (eq. 39).
+ *
+ * @param clearness solar over clear-sky radiation, 0-1
+ */
+export function netLongwave(
+  maxC: number,
+  minC: number,
+  vapourKpa: number,
+  clearness: number,
+): number {
+  const hot = Math.pow(maxC + 273.16, 4);
+  const cold = Math.pow(minC + 273.16, 4);
+  const humid = 0.34 - 0.14 * Math.sqrt(vapourKpa);
+  return STEFAN_BOLTZMANN_MJ * ((hot + cold) / 2) * humid * (1.35 * clearness - 0.35);
+}
+
+/** Solar radiation kept by the reference grass, albedo 0.23, MJ m-2 d-1 (eq. 38). */
+export const netShortwave = (solarMj: number): number => 0.77 * solarMj;
+
+/**
  * Net radiation over the reference grass, MJ m-2 d-1 (eq. 37-40).
  *
  * @param clearness solar over clear-sky radiation to be used for the sky's heat; null takes the day's
  *   own. A shaded crop keeps the open field's clearness: panels hide sun, they do not clear the sky.
  */
 export function netRadiation(day: DayWeather, clearness: number | null = null): number {
-  const clear =
-    (0.75 + 2e-5 * day.elevationM) * extraterrestrialDaily(day.latitudeDeg, day.dayOfYear);
-  const ratio = Math.min(clearness ?? (clear > 0 ? day.solarMj / clear : 0.5), 1);
+  const ratio = Math.min(clearness ?? clearnessOf(day), 1);
   const vapour = day.vapourKpa ?? saturationPressure(day.minC);
-  const hot = Math.pow(day.maxC + 273.16, 4);
-  const cold = Math.pow(day.minC + 273.16, 4);
-  const long =
-    STEFAN_BOLTZMANN_MJ *
-    ((hot + cold) / 2) *
-    (0.34 - 0.14 * Math.sqrt(vapour)) *
-    (1.35 * ratio - 0.35);
-  return 0.77 * day.solarMj - long;
+  return netShortwave(day.solarMj) - netLongwave(day.maxC, day.minC, vapour, ratio);
 }
 
 /**

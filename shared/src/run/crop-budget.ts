@@ -1,10 +1,6 @@
 import type { CropBudget } from '../contract/result.js';
 import type { RunCrop } from '../contract/run.js';
-import {
-  extraterrestrialDaily,
-  referenceEvapotranspiration,
-  windAt2m,
-} from '../crops/evapotranspiration.js';
+import { clearnessOf, referenceEvapotranspiration, windAt2m } from '../crops/evapotranspiration.js';
 import { yieldBand } from '../crops/response.js';
 import { periodBudget, type LightSums } from '../light/budget.js';
 import type { RunState } from './state.js';
@@ -52,22 +48,11 @@ function seasonWater(state: RunState, crop: RunCrop, sums: LightSums) {
     let under = 0;
     for (let p = 0; p < sums.positions; p += 1) under += sums.par[row + p];
     const share = sums.open[day] > 0 ? under / sums.positions / sums.open[day] : 1;
-    const clearness = openClearness(base);
+    const clearness = clearnessOf(base);
     openMm += referenceEvapotranspiration(base, 0, clearness);
     shadedMm += referenceEvapotranspiration({ ...base, solarMj: solarMj * share }, 0, clearness);
   }
   return { openMm, shadedMm };
-}
-
-function openClearness(day: {
-  latitudeDeg: number;
-  elevationM: number;
-  dayOfYear: number;
-  solarMj: number;
-}): number {
-  const clear =
-    (0.75 + 2e-5 * day.elevationM) * extraterrestrialDaily(day.latitudeDeg, day.dayOfYear);
-  return clear > 0 ? Math.min(day.solarMj / clear, 1) : 0.5;
 }
 
 /** Light, yield range and water of one crop between sowing and harvest. */
