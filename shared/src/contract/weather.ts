@@ -148,3 +148,15 @@ export const Weather = z.object({
 export type Weather = z.infer<typeof Weather>;
 export const WeatherList = z.object({ items: z.array(Weather) });
 export type WeatherList = z.infer<typeof WeatherList>;
+
+/** The hours of a stored year, as the engine reads them (light/weather-year). */
+export const HourlyYearAnswer = z.object({
+  year: z.int(),
+  utcOffsetHours: z.number(),
+  intervalMinutes: z.literal(60),
+  ghi: z.array(z.number()),
+  dni: z.array(z.number()),
+  dhi: z.array(z.number()),
+  temperatureC: z.array(z.number()),
+  windMs: z.array(z.number()),
+});
