@@ -1,11 +1,7 @@
 import { prepareBeamShade } from './rows/beam.js';
-import {
-  prepareEndlessRows,
-  type EndlessRows,
-  type EndlessRowsInput,
-  type PanelLight,
-} from './rows/endless.js';
+import { prepareEndlessRows, type EndlessRows, type EndlessRowsInput } from './rows/endless.js';
 import { planeFactor, type RowGeometry } from './rows/geometry.js';
+import type { PanelLight } from './rows/panel-light.js';
 import type { Balance } from './rows/reflections.js';
 
 /** Light under rows that stand still or turn, at one canopy height, for one sun after another. */

@@ -1,12 +1,9 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { toRadians } from '../../src/light/angles.js';
-import {
-  prepareEndlessRows,
-  type EndlessRows,
-  type PanelLight,
-} from '../../src/light/rows/endless.js';
+import { prepareEndlessRows, type EndlessRows } from '../../src/light/rows/endless.js';
 import { shadedShare, type RowGeometry } from '../../src/light/rows/geometry.js';
+import type { PanelLight } from '../../src/light/rows/panel-light.js';
 import { ErrorTally, type Group } from '../quantity.js';
 
 const NAME = 'rows2d';

@@ -1,5 +1,13 @@
-import { discBelow, SUN_RADIUS } from './disc.js';
-import { panelEndsAbove, type RowGeometry } from './geometry.js';
+import { panelEndsAbove, type PanelEnds, type RowGeometry } from './geometry.js';
+import {
+  discView,
+  shadowFrom,
+  shadowTo,
+  softShare,
+  type DiscView,
+  type Ends,
+  type HalfShadow,
+} from './half-shadow.js';
 
 /** Where a half shadow is wider than this many pitches, receivers get the mean over a pitch. */
 const WIDEST_PITCHES = 25;
@@ -18,13 +26,80 @@ export interface BeamShade {
   shares(tangent: number, sunAltitude: number, out: Float64Array, through?: Float64Array): void;
 }
 
-/** The sun's disc against the profile: how an angle from its centre counts on the disc. */
-interface DiscView {
-  tangent: number;
-  /** Radii of the disc per sine of the angle between edge and centre, both in the profile. */
-  scale: number;
-  /** Change of the disc's weight per radius, see discBelow. */
-  slope: number;
+/** First index of a sorted array whose value is at least x. */
+function firstFrom(sorted: Float64Array, x: number): number {
+  let low = 0;
+  let high = sorted.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (sorted[middle] < x) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
+/** Receivers of one geometry and height, sorted by their place within a pitch. */
+interface Receivers {
+  /** Places in pitches, 0 to 1, rising. */
+  places: Float64Array;
+  /** Index among the caller's receivers. */
+  order: Int32Array;
+}
+
+function sortReceivers(positions: Float64Array, pitch: number): Receivers {
+  const within = positions.map((u) => u / pitch - Math.floor(u / pitch));
+  const order = Int32Array.from(within, (_, i) => i).sort((a, b) => within[a] - within[b]);
+  return { places: Float64Array.from(order, (i) => within[i]), order };
+}
+
+/** Counts of full shadow: rows that cover a receiver, changing only at two places in a pitch. */
+function fillPoint(
+  { places, order }: Receivers,
+  a: number,
+  b: number,
+  through: Float64Array,
+  out: Float64Array,
+): void {
+  const most = through.length - 1;
+  const opens = a - Math.floor(a) || 1;
+  const closes = b - Math.floor(b) || 1;
+  const firstOpen = firstFrom(places, opens);
+  const firstClose = firstFrom(places, closes);
+  const base = Math.floor(-a) - Math.floor(-b);
+  const between = base + (firstOpen < firstClose ? 1 : -1);
+  const low = Math.min(firstOpen, firstClose);
+  const high = Math.max(firstOpen, firstClose);
+  const outside = through[Math.min(base, most)];
+  for (let i = 0; i < low; i += 1) out[order[i]] = outside;
+  if (high > low) {
+    const inside = through[Math.min(Math.max(between, 0), most)];
+    for (let i = low; i < high; i += 1) out[order[i]] = inside;
+  }
+  for (let i = high; i < places.length; i += 1) out[order[i]] = outside;
+}
+
+/** Soften the receivers between the places `from` and `to` (in pitches, under a pitch apart). */
+function soften(
+  { places, order }: Receivers,
+  ends: Ends,
+  disc: DiscView,
+  shadow: HalfShadow,
+  from: number,
+  to: number,
+  through: Float64Array,
+  out: Float64Array,
+): void {
+  const count = places.length;
+  const whole = Math.floor(from);
+  const start = firstFrom(places, from - whole);
+  const reach = to - whole;
+  for (let n = 0; n < count; n += 1) {
+    const wraps = start + n >= count;
+    const i = wraps ? start + n - count : start + n;
+    const place = places[i];
+    if ((wraps ? place + 1 : place) > reach) break;
+    out[order[i]] = softShare(ends, place, disc, shadow, through);
+  }
 }
 
 /**
@@ -46,104 +121,49 @@ export function prepareBeamShade(
   z0: number,
   discSun: boolean,
 ): BeamShade {
-  const ends = panelEndsAbove(geometry, z0);
-  const { pitch } = geometry;
-  if (!ends.above || geometry.width === 0)
+  const above = panelEndsAbove(geometry, z0);
+  if (!above.above || geometry.width === 0) {
     return { shares: (_tangent, _altitude, out) => out.fill(1) };
-  const u1 = ends.u1 / pitch;
-  const u2 = ends.u2 / pitch;
-  const up1 = (ends.z1 - z0) / pitch;
-  const up2 = (ends.z2 - z0) / pitch;
-  const count = positions.length;
-  const places = positions.map((u) => u / pitch);
-
-  /** Chord of the disc, in radii, that an end at x across and `up` above the receiver cuts. */
-  const chord = (x: number, up: number, disc: DiscView): number => {
-    const length = Math.sqrt(x * x + up * up);
-    return length === 0 ? 0 : ((x - up * disc.tangent) / length) * disc.scale;
-  };
-
-  /** Share for a receiver that sees ends of rows first to last within the disc. */
-  const partial = (
-    place: number,
-    disc: DiscView,
-    first: number,
-    last: number,
-    through: Float64Array,
-  ): number => {
-    const most = through.length - 1;
-    const end = (k: number, upper: boolean): number => {
-      const y1 = chord(k + u1 - place, up1, disc);
-      const y2 = chord(k + u2 - place, up2, disc);
-      return upper === y1 > y2 ? y1 : y2;
-    };
-    let share = 0;
-    let from = 0;
-    let opened = first;
-    let closed = first;
-    let nextOpen = end(first, false);
-    let nextClose = end(first, true);
-    while (closed <= last && from < 1) {
-      const opens = opened <= last && nextOpen <= nextClose;
-      const to = discBelow(opens ? nextOpen : nextClose, disc.slope);
-      share += (to - from) * through[Math.min(opened - closed, most)];
-      from = to;
-      if (opens) {
-        opened += 1;
-        if (opened <= last) nextOpen = end(opened, false);
-      } else {
-        closed += 1;
-        if (closed <= last) nextClose = end(closed, true);
-      }
-    }
-    return share + (1 - from);
-  };
-
+  }
+  const ends = inPitches(above, geometry.pitch, z0);
+  const receivers = sortReceivers(positions, geometry.pitch);
   const powers = lightThrough(transmittance);
-
   const shares = (
     tangent: number,
     sunAltitude: number,
     out: Float64Array,
     through = powers,
   ): void => {
-    const most = through.length - 1;
-    const cosine = 1 / Math.sqrt(1 + tangent * tangent);
-    const sinAltitude = Math.sin(sunAltitude);
-    // The sun's distance from the row direction shrinks its disc's width in the profile.
-    const radius = SUN_RADIUS * Math.min(cosine / sinAltitude, 1e6);
-    const spread = discSun ? Math.asin(Math.min(radius, 1)) : 0;
-    const limit = Math.PI / 2 - 1e-6;
-    const angle = Math.atan(tangent);
-    const early = spread === 0 ? tangent : Math.tan(Math.max(angle - spread, -limit));
-    const late = spread === 0 ? tangent : Math.tan(Math.min(angle + spread, limit));
-    // Shadow ends of row 0 for both sides of the disc.
-    const a1 = Math.min(u1 - up1 * early, u2 - up2 * early);
-    const b1 = Math.max(u1 - up1 * early, u2 - up2 * early);
-    const a2 = Math.min(u1 - up1 * late, u2 - up2 * late);
-    const b2 = Math.max(u1 - up1 * late, u2 - up2 * late);
-    if (Math.max(Math.abs(a1 - a2), Math.abs(b1 - b2)) > WIDEST_PITCHES) {
-      out.fill(meanShare(Math.abs(u1 - u2 - (up1 - up2) * tangent), through));
-      return;
-    }
-    const slope = (-SUN_RADIUS * tangent * cosine) / sinAltitude;
-    const disc = { tangent, scale: cosine / radius, slope };
-    for (let i = 0; i < count; i += 1) {
-      const place = places[i];
-      const opensEarly = Math.floor(place - a1);
-      const opensLate = Math.floor(place - a2);
-      const closesEarly = Math.floor(place - b1);
-      const closesLate = Math.floor(place - b2);
-      if (opensEarly === opensLate && closesEarly === closesLate) {
-        out[i] = through[Math.min(opensEarly - closesEarly, most)];
-      } else {
-        const first = Math.min(closesEarly, closesLate);
-        const last = Math.max(opensEarly, opensLate);
-        out[i] = partial(place, disc, first, last + 1, through);
-      }
+    const disc = discView(tangent, sunAltitude, discSun);
+    const shadow = {
+      a1: shadowFrom(ends, disc.early),
+      a2: shadowFrom(ends, disc.late),
+      b1: shadowTo(ends, disc.early),
+      b2: shadowTo(ends, disc.late),
+    };
+    const a = shadowFrom(ends, tangent);
+    const b = shadowTo(ends, tangent);
+    const aFrom = Math.min(shadow.a1, shadow.a2, a);
+    const aTo = Math.max(shadow.a1, shadow.a2, a);
+    const bFrom = Math.min(shadow.b1, shadow.b2, b);
+    const bTo = Math.max(shadow.b1, shadow.b2, b);
+    const widest = Math.max(aTo - aFrom, bTo - bFrom);
+    if (widest > WIDEST_PITCHES) {
+      out.fill(meanShare(b - a, through));
+    } else if (widest >= 1) {
+      soften(receivers, ends, disc, shadow, 0, 1, through, out);
+    } else {
+      fillPoint(receivers, a, b, through, out);
+      if (!discSun) return;
+      soften(receivers, ends, disc, shadow, aFrom, aTo, through, out);
+      soften(receivers, ends, disc, shadow, bFrom, bTo, through, out);
     }
   };
   return { shares };
+}
+
+function inPitches({ u1, z1, u2, z2 }: PanelEnds, pitch: number, z0: number): Ends {
+  return { u1: u1 / pitch, up1: (z1 - z0) / pitch, u2: u2 / pitch, up2: (z2 - z0) / pitch };
 }
 
 /** Mean over a pitch where each row shades `depth` pitches. */

@@ -1,13 +1,13 @@
 import { InputError, requireWithin } from '../../errors.js';
 import { prepareBeamShade } from './beam.js';
 import {
-  planeFactor,
   profileTangent,
   requireRowGeometry,
   requireRowOptics,
   type RowGeometry,
   type RowOptics,
 } from './geometry.js';
+import { fillBalance, fillPanelLight, litShare, type PanelLight } from './panel-light.js';
 import {
   neighbours,
   prepareReflections,
@@ -31,15 +31,6 @@ export interface EndlessRowsInput {
   quality?: Quality;
 }
 
-/** Irradiance of the panel faces per unit horizontal light. */
-export interface PanelLight {
-  front: number;
-  rear: number;
-  /** Of these, by reflection from ground and other panels. */
-  frontReflected: number;
-  rearReflected: number;
-}
-
 /** Light under endless rows of one geometry, ready to be asked for any sun. */
 export interface EndlessRows {
   /** Share of an even sky's horizontal light at each receiver, reflections included. */
@@ -59,17 +50,6 @@ export interface EndlessRows {
   litShare(tangent: number): number;
 }
 
-/** Light of the panel faces straight from a beam, averaged over the slant, per unit horizontal light. */
-function directPanel(geometry: RowGeometry, transmittance: number, tangent: number): number {
-  const depth = (geometry.width * Math.abs(planeFactor(geometry, tangent))) / geometry.pitch;
-  if (depth <= 1) return Math.abs(planeFactor(geometry, tangent));
-  const full = Math.floor(depth);
-  const part = depth - full;
-  const through =
-    (1 - part) * Math.pow(transmittance, full) + part * Math.pow(transmittance, full + 1);
-  return ((1 - through) / (1 - transmittance)) * (geometry.pitch / geometry.width);
-}
-
 /** Add the reflected beam at all receivers, times `weight`. */
 function addReflected(
   { angles, receivers }: Reflections,
@@ -82,22 +62,6 @@ function addReflected(
   for (let i = 0; i < count; i += 1) {
     out[i] += weight * (low * receivers[row * count + i] + high * receivers[next * count + i]);
   }
-}
-
-function fillPanel(
-  { angles, faces }: Reflections,
-  geometry: RowGeometry,
-  transmittance: number,
-  tangent: number,
-  out: PanelLight,
-): void {
-  const { row, next, low, high } = neighbours(angles, tangent);
-  const direct = directPanel(geometry, transmittance, tangent);
-  const onFront = planeFactor(geometry, tangent) > 0;
-  out.frontReflected = faces[row * 2] * low + faces[next * 2] * high;
-  out.rearReflected = faces[row * 2 + 1] * low + faces[next * 2 + 1] * high;
-  out.front = out.frontReflected + (onFront ? direct : 0);
-  out.rear = out.rearReflected + (onFront ? 0 : direct);
 }
 
 /**
@@ -145,15 +109,12 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
       addReflected(reflections, tangent, weight, out);
     },
     beamPanel: (tangent, out) => {
-      fillPanel(reflections, geometry, optics.transmittance, tangent, out);
+      fillPanelLight(reflections, geometry, optics.transmittance, tangent, out);
     },
     beamBalance: (tangent, out) => {
-      reflections.balance(tangent, out);
+      fillBalance(reflections, geometry, optics, tangent, out);
     },
-    litShare: (tangent) => {
-      const depth = (geometry.width * Math.abs(planeFactor(geometry, tangent))) / geometry.pitch;
-      return depth <= 1 ? 1 : 1 / depth;
-    },
+    litShare: (tangent) => litShare(geometry, tangent),
   };
   addSky(rows, reflections.angles);
   return rows;

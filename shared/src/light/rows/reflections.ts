@@ -29,8 +29,13 @@ export interface Reflections {
   receivers: Float64Array;
   /** On the front and the rear of the panel, in the same measure: angles x 2. */
   faces: Float64Array;
-  /** Ends of the light of a beam at any tangent, without interpolation. */
-  balance(tangent: number, out: Balance): void;
+  /**
+   * Where a beam's light ends, in the same measure: ground (structure included), panels, sky, and
+   * of these what the ground got straight: angles x 4.
+   */
+  ends: Float64Array;
+  /** Shares that panel faces and ground throw back: front, rear, ground. */
+  back: [number, number, number];
 }
 
 /** What reflections are prepared from. */
@@ -92,14 +97,13 @@ function faceWeights(input: ReflectionsInput, cut: Cut, exchange: Exchange): Flo
   });
 }
 
-/** Weights of first kept light for ground (structure included), panels and sky. */
-function balanceWeights(cut: Cut, exchange: Exchange, optics: RowOptics): Float64Array[] {
+/** Weights of first kept light for what ends in ground and structure, panels and sky. */
+function endWeights(cut: Cut, exchange: Exchange): Float64Array[] {
   const n = elementCount(cut);
   const ends = [new Float64Array(n), new Float64Array(n), new Float64Array(n)];
   for (let j = 0; j < n; j += 1) {
     const back = exchange.reflected[j];
-    if (j < cut.ground) ends[0][j] = (1 - optics.structureShade) * (1 - optics.albedo);
-    else ends[1][j] = 1 - back;
+    ends[j < cut.ground ? 0 : 1][j] = 1 - back;
     ends[2][j] = back * exchange.escaping[j];
   }
   return ends.map((weights) => weigh(weights, exchange.settled));
@@ -119,11 +123,13 @@ export function prepareReflections(input: ReflectionsInput, quality: Quality): R
   const { transmittance, structureShade } = optics;
   const atReceivers = receiverWeights(input, cut, exchange, quality);
   const onFaces = faceWeights(input, cut, exchange);
-  const ends = balanceWeights(cut, exchange, optics);
+  const weights = endWeights(cut, exchange);
   const count = positions.length;
   const receivers = new Float64Array(angles * count);
   const faces = new Float64Array(angles * 2);
+  const ends = new Float64Array(angles * 4);
   const kept = new Float64Array(elementCount(cut));
+  const direct = new Float64Array(elementCount(cut)).fill(1, 0, cut.ground);
   for (let a = 0; a < angles; a += 1) {
     const angle = -Math.PI / 2 + ((a + 0.5) / angles) * Math.PI;
     firstKept(geometry, transmittance, cut, Math.tan(angle), kept);
@@ -131,21 +137,17 @@ export function prepareReflections(input: ReflectionsInput, quality: Quality): R
     for (let r = 0; r < count; r += 1) {
       receivers[a * count + r] = dot(atReceivers[r], kept) * scale * (1 - structureShade);
     }
-    faces[a * 2] = dot(onFaces[0], kept) * scale;
-    faces[a * 2 + 1] = dot(onFaces[1], kept) * scale;
+    for (let f = 0; f < 2; f += 1) faces[a * 2 + f] = dot(onFaces[f], kept) * scale;
+    for (let e = 0; e < 3; e += 1) ends[a * 4 + e] = dot(weights[e], kept) * scale;
+    ends[a * 4 + 3] = dot(direct, kept) * scale;
   }
-  const balance = (tangent: number, out: Balance): void => {
-    firstKept(geometry, transmittance, cut, tangent, kept);
-    out.ground = dot(ends[0], kept);
-    out.panel = dot(ends[1], kept);
-    out.escaped = dot(ends[2], kept);
-    out.structure = 0;
-    if (structureShade > 0) {
-      const onGround = out.ground / ((1 - structureShade) * (1 - optics.albedo));
-      out.structure = onGround * structureShade;
-    }
-  };
-  return { angles, receivers, faces, balance };
+  const { reflected } = exchange;
+  const back: [number, number, number] = [
+    reflected[cut.ground],
+    reflected[cut.ground + cut.face],
+    reflected[0],
+  ];
+  return { angles, receivers, faces, ends, back };
 }
 
 /** A tangent's two neighbours in the table, with weights per unit of horizontal light. */
@@ -161,11 +163,8 @@ export function neighbours(angles: number, tangent: number): Neighbours {
   const at = (angle / Math.PI + 0.5) * angles - 0.5;
   const row = Math.min(Math.max(Math.floor(at), 0), angles - 1);
   const share = Math.min(Math.max(at - row, 0), 1);
-  const perHorizontal = 1 / Math.cos(angle);
-  return {
-    row,
-    next: Math.min(row + 1, angles - 1),
-    low: (1 - share) * perHorizontal,
-    high: share * perHorizontal,
-  };
+  const next = Math.min(row + 1, angles - 1);
+  const cosine = (index: number) => Math.sin(((index + 0.5) / angles) * Math.PI);
+  const perHorizontal = 1 / ((1 - share) * cosine(row) + share * cosine(next));
+  return { row, next, low: (1 - share) * perHorizontal, high: share * perHorizontal };
 }
