@@ -56,7 +56,11 @@ export function AddPanel(props: Props) {
       {mode === 'draw' && <DrawTools editor={editor} />}
       {mode === 'type' &&
         (editor.shape.rings.length === 0 ? (
-          <FirstCorner editor={editor} fields={props.fields} />
+          <FirstCorner
+            key={props.fields.length > 0 ? 'near' : 'nowhere'}
+            editor={editor}
+            fields={props.fields}
+          />
         ) : (
           <DrawTools editor={editor} />
         ))}

@@ -1,10 +1,11 @@
 import type { LonLat } from '@furrowlight/shared/contract/fields';
 import L from 'leaflet';
 import { useEffect, useMemo, useState } from 'react';
-import { Polygon, Polyline, useMap, useMapEvents } from 'react-leaflet';
+import { CircleMarker, Polygon, Polyline, useMap, useMapEvents } from 'react-leaflet';
 import { toPair } from '../../../map/lat-lng';
 import { usePalette } from '../../../map/use-palette';
 import { CornerHandles } from './corner-handles';
+import { crossingOf } from './measure';
 import { addCorner, openRing } from './shape';
 import { snapped } from './snap';
 import type { BoundaryEditor } from './use-boundary-editor';
@@ -25,6 +26,7 @@ export function BoundaryLayer({ editor, taps, snapTo }: Props) {
   const { shown } = editor;
   const closed = shown.rings.filter((ring) => ring.closed);
   const open = shown.rings.find((ring) => !ring.closed);
+  const crossing = crossingOf(shown);
   return (
     <>
       {closed.length > 0 && (
@@ -44,6 +46,14 @@ export function BoundaryLayer({ editor, taps, snapTo }: Props) {
           positions={open.corners.map(toPair)}
           interactive={false}
           pathOptions={{ color: palette.ink, weight: 2.5 }}
+        />
+      )}
+      {crossing && (
+        <CircleMarker
+          center={toPair(crossing)}
+          radius={12}
+          interactive={false}
+          pathOptions={{ color: palette.danger, weight: 4, fill: false }}
         />
       )}
       {taps && editor.drawing && <DrawTaps editor={editor} snapTo={snapTo} />}

@@ -1,13 +1,13 @@
 import { Text } from '@mantine/core';
 import { formatNumber } from '../../../lib/format';
-import { crossingSides, figuresOf } from './measure';
+import { crossingOf, figuresOf } from './measure';
 import classes from './boundary-panel.module.css';
 import type { Shape } from './shape';
 
 /** Hectares and metres of the shape under the hand, and the first fault in it. */
 export function ShapeFigures({ shape }: { shape: Shape }) {
   const figures = figuresOf(shape);
-  const crossing = crossingSides(shape);
+  const crossing = crossingOf(shape);
   return (
     <div>
       <dl className={classes.figures}>
@@ -26,8 +26,7 @@ export function ShapeFigures({ shape }: { shape: Shape }) {
       </dl>
       {crossing && (
         <Text role="alert" size="sm" c="var(--fl-danger)" fw={500} mt="xs">
-          Sides {crossing[0]} and {crossing[1]} cross. Drag a corner until the boundary no longer
-          crosses itself.
+          The boundary crosses itself at the red mark. Drag a corner until it no longer does.
         </Text>
       )}
     </div>
