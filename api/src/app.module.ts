@@ -5,7 +5,10 @@ import { CommonModule } from './common/common.module.js';
 import type { AppConfig } from './config/app-config.js';
 import { ConfigModule } from './config/config.module.js';
 import { CooperativesModule } from './cooperatives/cooperatives.module.js';
+import { CropsModule } from './crops/crops.module.js';
 import { DatabaseModule } from './database/database.module.js';
+import { FarmsModule } from './farms/farms.module.js';
+import { FieldsModule } from './fields/fields.module.js';
 import { MembersModule } from './members/members.module.js';
 
 @Module({})
@@ -21,6 +24,9 @@ export class AppModule {
         MembersModule,
         CooperativesModule,
         AuditModule,
+        FarmsModule,
+        FieldsModule,
+        CropsModule,
       ],
     };
   }

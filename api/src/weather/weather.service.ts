@@ -1,5 +1,10 @@
 import type { MemberPrincipal } from '@furrowlight/shared/access/may';
-import type { Weather, WeatherInput, WeatherPreview, WeatherPreviewRequest } from '@furrowlight/shared/contract/weather';
+import type {
+  Weather,
+  WeatherInput,
+  WeatherPreview,
+  WeatherPreviewRequest,
+} from '@furrowlight/shared/contract/weather';
 import type { HourlyYear } from '@furrowlight/shared/light/weather-year';
 import { Injectable } from '@nestjs/common';
 import { AuditService } from '../audit/audit.service.js';
@@ -97,7 +102,7 @@ export class WeatherService {
         createdAt: this.clock.instant(),
       });
       await manager.insert(WeatherYearEntity, row);
-      await this.audit.record(manager, principal, 'weather.created', {
+      await this.audit.record(manager, principal, 'created', {
         kind: 'weather',
         id: row.id,
         name: row.name,
@@ -120,7 +125,7 @@ export class WeatherService {
         throw new DomainError('conflict', `Scenarios rest on this weather year: ${names}.`);
       }
       await manager.delete(WeatherYearEntity, { id, cooperativeId });
-      await this.audit.record(manager, principal, 'weather.removed', {
+      await this.audit.record(manager, principal, 'removed', {
         kind: 'weather',
         id,
         name: weather.name,
