@@ -35,31 +35,38 @@ const LOWEST_ALTITUDE_DEG = 1;
  */
 const CLOUD_PASS = [1.0, 1.0, 1.0, 1.0, 0.97, 0.87, 0.66] as const;
 
+/** Trapezoid weights of each spectral value in an integral over [from, to]. */
+function integralWeights(from: number, to: number, weight?: (nm: number) => number): Float64Array {
+  const unit = new Float64Array(WAVELENGTHS_NM.length);
+  return Float64Array.from(WAVELENGTHS_NM, (_, i) => {
+    unit[i] = 1;
+    const share = integrateSpectrum(WAVELENGTHS_NM, unit, from, to, weight);
+    unit[i] = 0;
+    return share;
+  });
+}
+
+/** What each entry of a makeup sums up of a spectrum; integrals are linear, so this is done once. */
+const ENTRY_WEIGHTS: readonly Float64Array[] = [
+  ...Array.from({ length: BAND_COUNT }, (_, band) =>
+    integralWeights(BAND_EDGES_NM[band], BAND_EDGES_NM[band + 1]),
+  ),
+  ...Array.from({ length: BAND_COUNT }, (_, band) =>
+    integralWeights(BAND_EDGES_NM[band], BAND_EDGES_NM[band + 1], micromolPerJoule),
+  ),
+  integralWeights(655, 665, micromolPerJoule),
+  integralWeights(725, 735, micromolPerJoule),
+];
+
 function makeupOf(spectrum: Float64Array, target: Float64Array, offset: number): number {
   let total = 0;
-  for (let band = 0; band < BAND_COUNT; band += 1) {
-    const from = BAND_EDGES_NM[band];
-    const to = BAND_EDGES_NM[band + 1];
-    const energy = integrateSpectrum(WAVELENGTHS_NM, spectrum, from, to);
-    const photons = integrateSpectrum(WAVELENGTHS_NM, spectrum, from, to, micromolPerJoule);
-    target[offset + band] = energy;
-    target[offset + PHOTONS + band] = photons;
-    total += energy;
+  for (let entry = 0; entry < MAKEUP_LENGTH; entry += 1) {
+    const weights = ENTRY_WEIGHTS[entry];
+    let sum = 0;
+    for (let i = 0; i < spectrum.length; i += 1) sum += weights[i] * spectrum[i];
+    target[offset + entry] = sum;
+    if (entry < BAND_COUNT) total += sum;
   }
-  target[offset + RED_10NM] = integrateSpectrum(
-    WAVELENGTHS_NM,
-    spectrum,
-    655,
-    665,
-    micromolPerJoule,
-  );
-  target[offset + FAR_RED_10NM] = integrateSpectrum(
-    WAVELENGTHS_NM,
-    spectrum,
-    725,
-    735,
-    micromolPerJoule,
-  );
   for (let i = 0; i < MAKEUP_LENGTH; i += 1) target[offset + i] /= total;
   return total;
 }
