@@ -1,3 +1,4 @@
+import { DEG } from './angles.js';
 import { prepareBeamShade } from './rows/beam.js';
 import { prepareEndlessRows, type EndlessRows, type EndlessRowsInput } from './rows/endless.js';
 import { planeFactor, type RowGeometry } from './rows/geometry.js';
@@ -52,7 +53,7 @@ export function fixedRowLight(input: EndlessRowsInput): RowLight {
 }
 
 /** Step of the rotations at which a tracker's sky and reflections are prepared, radians. */
-const ROTATION_STEP = (3 * Math.PI) / 180;
+const ROTATION_STEP = { full: 3 * DEG, preview: 12 * DEG } as const;
 
 function mixPanel(a: PanelLight, b: PanelLight, share: number, out: PanelLight): void {
   out.front = a.front * (1 - share) + b.front * share;
@@ -73,13 +74,13 @@ function mixBalance(a: Balance, b: Balance, share: number, out: Balance): void {
  * that a turn to the other side is the mirrored row.
  *
  * Beam shadows are exact for every rotation; the sky's light and reflections are interpolated
- * between rotations 3 degrees apart (error below 0.001 of open field).
+ * between rotations 3 degrees apart (error below 0.001 of open field; a preview takes 12 degrees).
  *
  * @param input rows at rotation 0: tilt is ignored, surfaceAzimuth is where positive turns face
  * @param maxRotation largest rotation, radians
  */
 export function turningRowLight(input: EndlessRowsInput, maxRotation: number): RowLight {
-  const steps = Math.max(1, Math.ceil(maxRotation / ROTATION_STEP - 1e-9));
+  const steps = Math.max(1, Math.ceil(maxRotation / ROTATION_STEP[input.quality ?? 'full'] - 1e-9));
   const grid: EndlessRows[] = [];
   const geometryAt = (rotation: number): RowGeometry => ({ ...input.geometry, tilt: rotation });
   for (let i = 0; i <= steps; i += 1) {

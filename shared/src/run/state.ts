@@ -1,5 +1,5 @@
 import type { Layout } from '../contract/layout.js';
-import type { RunInput } from '../contract/run.js';
+import type { RunInput, Site } from '../contract/run.js';
 import { toRadians } from '../light/angles.js';
 import { defaultAtmosphere } from '../light/atmosphere.js';
 import {
@@ -10,6 +10,7 @@ import {
 } from '../light/band-table.js';
 import { emptyLightSums, type LightSums } from '../light/budget.js';
 import { fixedRowLight, turningRowLight, type RowLight } from '../light/row-light.js';
+import type { Quality } from '../light/rows/reflections.js';
 import { noSplit, type SplitSums } from '../light/sun-split.js';
 import type { TrackerAxis } from '../light/tracker.js';
 import { daysIn } from '../light/weather-year.js';
@@ -58,13 +59,36 @@ export interface RunState {
 /** Sun altitude at air mass 1.5, where modules are rated, radians. */
 const RATING_ALTITUDE_DEG = 42;
 
-function lightOf(input: RunInput, heightM: number, positions: Float64Array): RowLight {
-  const rows = rowsOfLayout(input.layout, input.site, heightM, positions);
+/** What a caller that runs again and again may hold ready. */
+export interface Preparation {
+  quality: Quality;
+  table: BandTable;
+  /** Canopy heights to be counted, m. */
+  heightsM: number[];
+}
+
+const fullPreparation = (input: RunInput): Preparation => ({
+  quality: 'full',
+  table: tableOf(input.site),
+  heightsM: heightsOf(input),
+});
+
+function lightOf(
+  input: RunInput,
+  heightM: number,
+  positions: Float64Array,
+  quality: Quality,
+): RowLight {
+  const rows = { ...rowsOfLayout(input.layout, input.site, heightM, positions), quality };
   const { tracker, kind } = input.layout;
   return kind === 'single-axis-tracker' && tracker
     ? turningRowLight(rows, toRadians(tracker.maxAngleDeg))
     : fixedRowLight(rows);
 }
+
+/** Make-up of light over a site under cloudless air of its height. */
+export const tableOf = (site: Site): BandTable =>
+  prepareBandTable(defaultAtmosphere(site.elevationM, site.albedo));
 
 function steeringOf(layout: Layout): Steering | null {
   if (layout.kind !== 'single-axis-tracker' || !layout.tracker) return null;
@@ -87,11 +111,13 @@ function heightsOf(input: RunInput): number[] {
  *
  * @throws InputError naming what cannot be run
  */
-export function prepareRun(input: RunInput): RunState {
+export function prepareRun(
+  input: RunInput,
+  { quality, table, heightsM }: Preparation = fullPreparation(input),
+): RunState {
   const { site, layout, options, weather } = input;
   const positions = stripMiddles(layout.pitchM, options.positions);
   const days = daysIn(weather);
-  const table = prepareBandTable(defaultAtmosphere(site.elevationM, site.albedo));
   const cropFirst = layout.tracker?.programme === 'crop-first';
   const ratingRow = table.direct.length / table.directWm2.length;
   const rated = table.direct.subarray(
@@ -106,9 +132,9 @@ export function prepareRun(input: RunInput): RunState {
     suns: emptyDaySuns(options.sunStepMinutes),
     table,
     split: emptyBandSplit(),
-    planes: heightsOf(input).map((heightM) => ({
+    planes: heightsM.map((heightM) => ({
       heightM,
-      light: lightOf(input, heightM, positions),
+      light: lightOf(input, heightM, positions, quality),
       sums: emptyLightSums(days, options.positions),
     })),
     steering: steeringOf(layout),
@@ -118,7 +144,7 @@ export function prepareRun(input: RunInput): RunState {
     months: Array.from({ length: 12 }, noSplit),
     energyByMonth: Array.from({ length: 12 }, noEnergy),
     plainTracker: cropFirst
-      ? { light: lightOf(input, 0, new Float64Array(1)), energy: noEnergy() }
+      ? { light: lightOf(input, 0, new Float64Array(1), quality), energy: noEnergy() }
       : null,
     openEnergy: new Float64Array(days),
   };
