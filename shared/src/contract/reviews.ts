@@ -37,6 +37,7 @@ export type ReviewCreated = z.infer<typeof ReviewCreated>;
 
 /** A visitor swaps the token from the link for a cookie. */
 export const ReviewEntry = z.strictObject({ token: z.string().min(20).max(100) });
+export type ReviewEntry = z.infer<typeof ReviewEntry>;
 
 /** All the farmer's page shows; nothing of other fields or farms. */
 export const ReviewPage = z.object({

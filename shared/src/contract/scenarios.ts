@@ -23,6 +23,7 @@ export const ScenarioPatch = z.strictObject({
 export type ScenarioPatch = z.infer<typeof ScenarioPatch>;
 
 export const ScenarioCopy = z.strictObject({ name: line('Scenario name') });
+export type ScenarioCopy = z.infer<typeof ScenarioCopy>;
 
 /** Figures of the rows as laid over the boundary; null without a boundary. */
 export const LaidFigures = z.object({

@@ -1,0 +1,27 @@
+import { Module } from '@nestjs/common';
+import { AuditModule } from '../audit/audit.module.js';
+import { AuthModule } from '../auth/auth.module.js';
+import { CooperativesModule } from '../cooperatives/cooperatives.module.js';
+import { FieldsModule } from '../fields/fields.module.js';
+import { RunsModule } from '../runs/runs.module.js';
+import { ScenariosModule } from '../scenarios/scenarios.module.js';
+import { WeatherModule } from '../weather/weather.module.js';
+import { ReviewCookie } from './review-cookie.js';
+import { ReviewsController } from './reviews.controller.js';
+import { ReviewsService } from './reviews.service.js';
+
+@Module({
+  imports: [
+    AuditModule,
+    AuthModule,
+    CooperativesModule,
+    FieldsModule,
+    RunsModule,
+    ScenariosModule,
+    WeatherModule,
+  ],
+  controllers: [ReviewsController],
+  providers: [ReviewsService, ReviewCookie],
+  exports: [ReviewsService],
+})
+export class ReviewsModule {}

@@ -1,0 +1,16 @@
+import { Module } from '@nestjs/common';
+import { AuditModule } from '../audit/audit.module.js';
+import { CropsModule } from '../crops/crops.module.js';
+import { FieldsModule } from '../fields/fields.module.js';
+import { RunsModule } from '../runs/runs.module.js';
+import { WeatherModule } from '../weather/weather.module.js';
+import { ScenariosController } from './scenarios.controller.js';
+import { ScenariosService } from './scenarios.service.js';
+
+@Module({
+  imports: [AuditModule, CropsModule, FieldsModule, RunsModule, WeatherModule],
+  controllers: [ScenariosController],
+  providers: [ScenariosService],
+  exports: [ScenariosService],
+})
+export class ScenariosModule {}
