@@ -90,7 +90,8 @@ function lightOf(
 export const tableOf = (site: Site): BandTable =>
   prepareBandTable(defaultAtmosphere(site.elevationM, site.albedo));
 
-function steeringOf(layout: Layout): Steering | null {
+/** Axis and stops of a layout's tracker, in the field's own plane; null for rows that stand still. */
+export function steeringOf(layout: Layout): Steering | null {
   if (layout.kind !== 'single-axis-tracker' || !layout.tracker) return null;
   return {
     // The axis lies across the facing; positive rotation turns the front towards the facing.
