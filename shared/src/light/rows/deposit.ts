@@ -1,6 +1,12 @@
 import type { Cut } from './elements.js';
 import { planeFactor, type RowGeometry } from './geometry.js';
 
+/** Face elements that a beam reaches straight: from (included) to (left out). */
+export interface LitRange {
+  from: number;
+  to: number;
+}
+
 /**
  * Where a beam first stays: light kept by each element per pitch of unit horizontal light.
  *
@@ -10,6 +16,7 @@ import { planeFactor, type RowGeometry } from './geometry.js';
  *
  * @param tangent profileTangent of the sun
  * @param kept filled, one value an element
+ * @returns face elements that get any of it; ground elements all may
  */
 export function firstKept(
   geometry: RowGeometry,
@@ -17,26 +24,29 @@ export function firstKept(
   cut: Cut,
   tangent: number,
   kept: Float64Array,
-): void {
+): LitRange {
   kept.fill(0);
   const { pitch, width } = geometry;
   const factor = planeFactor(geometry, tangent);
   const depth = (width * Math.abs(factor)) / pitch;
   const full = Math.floor(depth);
   keepOnGround(kept, geometry, transmittance, cut, tangent, full, depth - full);
-  if (depth === 0) return;
-
   const face = cut.ground + (factor > 0 ? 0 : cut.face);
-  for (let strip = 0; strip < cut.face; strip += 1) {
+  if (depth === 0) return { from: face, to: face };
+
+  const reached = transmittance === 0 && depth > 1 ? Math.ceil(cut.face / depth) : cut.face;
+  for (let strip = 0; strip < reached; strip += 1) {
     let from = (strip / cut.face) * depth;
     const end = ((strip + 1) / cut.face) * depth;
     while (from < end - 1e-15) {
       const layer = Math.floor(from + 1e-12);
       const to = Math.min(end, layer + 1);
-      kept[face + strip] += (to - from) * Math.pow(transmittance, layer) * (1 - transmittance);
+      const before = layer === 0 ? 1 : Math.pow(transmittance, layer);
+      kept[face + strip] += (to - from) * before * (1 - transmittance);
       from = to;
     }
   }
+  return { from: face, to: face + reached };
 }
 
 /** Ground under `full` rows everywhere and under one more over the share `part` of a pitch. */
@@ -57,15 +67,14 @@ function keepOnGround(
   const shadeFrom = start - Math.floor(start);
   const outside = Math.pow(transmittance, full);
   const loss = outside * (1 - transmittance);
-  for (let strip = 0; strip < cut.ground; strip += 1) {
-    const from = strip / cut.ground;
-    const to = (strip + 1) / cut.ground;
-    let covered = 0;
-    for (const shift of [0, -1]) {
-      const a = Math.max(from, shadeFrom + shift);
-      const b = Math.min(to, shadeFrom + shift + part);
-      if (b > a) covered += b - a;
-    }
-    kept[strip] += (to - from) * outside - covered * loss;
+  const perStrip = outside / cut.ground;
+  for (let strip = 0; strip < cut.ground; strip += 1) kept[strip] = perStrip;
+  if (loss === 0 || part === 0) return;
+  // Place of the shade in strips; it may run over the end of the pitch.
+  const begin = shadeFrom * cut.ground;
+  const finish = (shadeFrom + part) * cut.ground;
+  for (let strip = Math.floor(begin); strip < finish; strip += 1) {
+    const covered = Math.min(strip + 1, finish) - Math.max(strip, begin);
+    kept[strip % cut.ground] -= (covered / cut.ground) * loss;
   }
 }

@@ -1,5 +1,5 @@
 import { InputError, requireWithin } from '../../errors.js';
-import { prepareBeamShade } from './beam.js';
+import { lightThrough, prepareBeamShade } from './beam.js';
 import {
   profileTangent,
   requireRowGeometry,
@@ -7,7 +7,14 @@ import {
   type RowGeometry,
   type RowOptics,
 } from './geometry.js';
-import { fillBalance, fillPanelLight, litShare, type PanelLight } from './panel-light.js';
+import {
+  fillBalance,
+  fillPanelLight,
+  litShare,
+  skyBalance,
+  skyPanelLight,
+  type PanelLight,
+} from './panel-light.js';
 import {
   neighbours,
   prepareReflections,
@@ -15,7 +22,7 @@ import {
   type Quality,
   type Reflections,
 } from './reflections.js';
-import { skyShare } from './sky-view.js';
+import { evenSky, prepareSkyView } from './sky-view.js';
 
 /** What endless rows are prepared from. */
 export interface EndlessRowsInput {
@@ -52,12 +59,13 @@ export interface EndlessRows {
 
 /** Add the reflected beam at all receivers, times `weight`. */
 function addReflected(
-  { angles, receivers }: Reflections,
+  reflections: Reflections,
   tangent: number,
   weight: number,
   out: Float64Array,
 ): void {
-  const { row, next, low, high } = neighbours(angles, tangent);
+  const { row, next, low, high } = neighbours(reflections, tangent);
+  const { receivers } = reflections;
   const count = out.length;
   for (let i = 0; i < count; i += 1) {
     out[i] += weight * (low * receivers[row * count + i] + high * receivers[next * count + i]);
@@ -92,14 +100,14 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
     input.discSun ?? true,
   );
 
+  const part = evenSky(lightThrough(optics.transmittance));
+  const skyView = prepareSkyView(geometry, receiverHeight, part, quality);
+  const skyReflected = reflections.sky.receivers;
   const rows: EndlessRows = {
-    sky: Float64Array.from(
-      positions,
-      (u) => skyShare(geometry, optics.transmittance, u, receiverHeight, quality) * open,
-    ),
-    skyReflected: new Float64Array(count),
-    skyPanel: { front: 0, rear: 0, frontReflected: 0, rearReflected: 0 },
-    skyBalance: { ground: 0, panel: 0, escaped: 0, structure: 0 },
+    sky: positions.map((u, i) => skyView.share(u) * open + skyReflected[i]),
+    skyReflected,
+    skyPanel: skyPanelLight(reflections, geometry, optics),
+    skyBalance: skyBalance(reflections, optics),
     tangent: (sunAzimuth, sunAltitude) => profileTangent(geometry, sunAzimuth, sunAltitude),
     beam: (tangent, sunAltitude, out) => {
       shade.shares(tangent, sunAltitude, out);
@@ -116,30 +124,5 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
     },
     litShare: (tangent) => litShare(geometry, tangent),
   };
-  addSky(rows, reflections.angles);
   return rows;
-}
-
-/** An even sky is the sum of beams from all profile angles, each worth cos(a)/2 da. */
-function addSky(rows: EndlessRows, angles: number): void {
-  const panel: PanelLight = { front: 0, rear: 0, frontReflected: 0, rearReflected: 0 };
-  const balance: Balance = { ground: 0, panel: 0, escaped: 0, structure: 0 };
-  for (let a = 0; a < angles; a += 1) {
-    const from = -Math.PI / 2 + (a / angles) * Math.PI;
-    const middle = from + (0.5 / angles) * Math.PI;
-    const weight = (Math.sin(from + Math.PI / angles) - Math.sin(from)) / 2;
-    const tangent = Math.tan(middle);
-    rows.addBeamReflected(tangent, weight, rows.skyReflected);
-    rows.beamPanel(tangent, panel);
-    rows.beamBalance(tangent, balance);
-    rows.skyPanel.front += weight * panel.front;
-    rows.skyPanel.rear += weight * panel.rear;
-    rows.skyPanel.frontReflected += weight * panel.frontReflected;
-    rows.skyPanel.rearReflected += weight * panel.rearReflected;
-    rows.skyBalance.ground += weight * balance.ground;
-    rows.skyBalance.panel += weight * balance.panel;
-    rows.skyBalance.escaped += weight * balance.escaped;
-    rows.skyBalance.structure += weight * balance.structure;
-  }
-  for (let i = 0; i < rows.sky.length; i += 1) rows.sky[i] += rows.skyReflected[i];
 }

@@ -34,9 +34,10 @@ export interface RowOptics {
 /** @throws InputError naming the part of the geometry that cannot stand. */
 export function requireRowGeometry(geometry: RowGeometry): void {
   const { pitch, width, tilt, midHeight } = geometry;
-  requireWithin('pitch', pitch, 0.01, 1e6, 'm');
-  requireWithin('width', width, 0, 1e6, 'm');
+  requireWithin('pitch', pitch, 0.1, 1000, 'm');
+  requireWithin('width', width, 0, 100, 'm');
   requireWithin('tilt', tilt, 0, Math.PI / 2 + 1e-9, 'rad');
+  requireWithin('midHeight', midHeight, 0, 1000, 'm');
   requireWithin('surfaceAzimuth', geometry.surfaceAzimuth, -10, 10, 'rad');
   if (width * Math.cos(tilt) > pitch + 1e-9) {
     throw new InputError('pitch', 'Rows collide: the pitch is smaller than the panel is wide.');

@@ -34,13 +34,14 @@ function straightToGround(geometry: RowGeometry, transmittance: number, tangent:
  * @param transmittance of a row, gaps counted as open
  */
 export function fillPanelLight(
-  { angles, faces }: Reflections,
+  reflections: Reflections,
   geometry: RowGeometry,
   transmittance: number,
   tangent: number,
   out: PanelLight,
 ): void {
-  const { row, next, low, high } = neighbours(angles, tangent);
+  const { row, next, low, high } = neighbours(reflections, tangent);
+  const { faces } = reflections;
   const factor = planeFactor(geometry, tangent);
   const depth = shadowDepth(geometry, tangent);
   const direct =
@@ -59,22 +60,50 @@ export function fillPanelLight(
  * share that goes straight to the ground; the sum is 1 to rounding.
  */
 export function fillBalance(
-  { angles, ends, back }: Reflections,
+  reflections: Reflections,
   geometry: RowGeometry,
   optics: RowOptics,
   tangent: number,
   out: Balance,
 ): void {
-  const { row, next, low, high } = neighbours(angles, tangent);
+  const { row, next, low, high } = neighbours(reflections, tangent);
+  const { ends, back } = reflections;
   const mix = (column: number) => ends[row * 4 + column] * low + ends[next * 4 + column] * high;
   const missed = straightToGround(geometry, optics.transmittance, tangent) - mix(3);
   const onPanel = planeFactor(geometry, tangent) > 0 ? back[0] : back[1];
-  const toGround = mix(0) + missed * (1 - back[2]);
   out.panel = mix(1) - missed * (1 - onPanel);
   out.escaped = mix(2) + missed * (back[2] - onPanel);
-  // Of what ends below the panels, structure takes its share first and the ground what it absorbs.
+  shareBelow(optics, mix(0) + missed * (1 - back[2]), out);
+}
+
+/** Of what ends below the panels, structure takes its share first and the ground what it absorbs. */
+function shareBelow(optics: RowOptics, below: number, out: Balance): void {
   const absorbed = (1 - optics.structureShade) * (1 - optics.albedo);
   const taken = absorbed + optics.structureShade;
-  out.ground = taken > 0 ? (toGround * absorbed) / taken : 0;
-  out.structure = toGround - out.ground;
+  out.ground = taken > 0 ? (below * absorbed) / taken : 0;
+  out.structure = below - out.ground;
+}
+
+/** Light of both faces from an even sky. */
+export function skyPanelLight(
+  { sky }: Reflections,
+  geometry: RowGeometry,
+  optics: RowOptics,
+): PanelLight {
+  const perArea = geometry.width > 0 ? geometry.pitch / geometry.width : 0;
+  const scale = perArea / (1 - optics.transmittance);
+  const [frontReflected, rearReflected] = sky.faces;
+  return {
+    front: sky.straight[0] * scale + frontReflected,
+    rear: sky.straight[1] * scale + rearReflected,
+    frontReflected,
+    rearReflected,
+  };
+}
+
+/** Where an even sky's light ends. */
+export function skyBalance({ sky }: Reflections, optics: RowOptics): Balance {
+  const out = { ground: 0, panel: sky.ends[1], escaped: sky.ends[2], structure: 0 };
+  shareBelow(optics, sky.ends[0], out);
+  return out;
 }

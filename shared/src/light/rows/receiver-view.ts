@@ -3,8 +3,8 @@ import { panelEndsAbove, type RowGeometry } from './geometry.js';
 /** Rows farther than this many heights fill under 2e-3 (preview) or 2e-4 (full) of the view. */
 const REACH = { full: 60, preview: 18 } as const;
 
-/** A row that fills less than this of the view is taken as evenly spread over its strips. */
-const NARROW = 0.02;
+/** A row seen lower than this (cosine from the vertical) is far: heights along it run evenly. */
+const LOW = 0.15;
 
 /** Light through panels weaker than this is left out of the view. */
 const FAINTEST = 1e-4;
@@ -53,6 +53,8 @@ export function prepareViewSweep(
   const total = 2 * rows + 1;
   const upper = new Float64Array(total);
   const lower = new Float64Array(total);
+  const upperCosine = new Float64Array(total);
+  const lowerCosine = new Float64Array(total);
   // Part of the slant above the receiver, in strips from the upper edge.
   const seen = (strips * Math.hypot(ends.u2 - ends.u1, ends.z1 - ends.z2)) / geometry.width;
   let offset = 0;
@@ -63,7 +65,10 @@ export function prepareViewSweep(
     return sine(offset + k * pitch + ends.u1 + down * c, Math.max(up1 - down * s, 0));
   };
 
-  /** Spread [from, to] over strips as if the sine ran evenly along the slant. */
+  /**
+   * Spread [from, to] over the strips of a far row. Along it the cosine runs evenly, and near the
+   * horizon the sine falls with half its square.
+   */
   const spread = (
     k: number,
     from: number,
@@ -71,16 +76,21 @@ export function prepareViewSweep(
     scale: number,
     base: number,
     out: Float64Array,
-  ) => {
-    const length = lower[k] - upper[k];
-    const q1 = (seen * (from - upper[k])) / length;
-    const q2 = (seen * (to - upper[k])) / length;
-    const low = Math.max(Math.min(q1, q2), 0);
-    const high = Math.min(Math.max(q1, q2), seen);
-    const perStrip = (scale * Math.abs(length)) / seen;
-    for (let strip = Math.floor(low); strip < high; strip += 1) {
-      const part = Math.min(strip + 1, high) - Math.max(strip, low);
-      if (part > 0) out[base + strip] += part * perStrip;
+  ): void => {
+    const perStrip = (lowerCosine[k] - upperCosine[k]) / seen;
+    if (perStrip === 0) return;
+    const c1 = Math.sqrt(1 - from * from);
+    const c2 = Math.sqrt(1 - to * to);
+    const least = Math.min(c1, c2);
+    const most = Math.max(c1, c2);
+    const perSquare = ((to - from) * scale) / Math.max(most * most - least * least, 1e-300);
+    const q1 = Math.max((most - upperCosine[k]) / perStrip, 0);
+    const q2 = Math.min((least - upperCosine[k]) / perStrip, seen);
+    let high = most;
+    for (let strip = Math.floor(q1); strip < q2; strip += 1) {
+      const low = Math.max(upperCosine[k] + perStrip * (strip + 1), least);
+      if (low < high) out[base + strip] += (high * high - low * low) * perSquare;
+      high = low;
     }
   };
 
@@ -94,8 +104,8 @@ export function prepareViewSweep(
     out: Float64Array,
   ) => {
     const length = lower[k] - upper[k];
-    if (Math.abs(length) < NARROW) {
-      if (length !== 0) spread(k, from, to, scale, base, out);
+    if (upperCosine[k] < LOW) {
+      spread(k, from, to, scale, base, out);
       return;
     }
     let edge = upper[k];
@@ -127,9 +137,15 @@ export function prepareViewSweep(
     offset = (Math.round(u / pitch) - rows) * pitch - u;
     for (let k = 0; k < total; k += 1) {
       const x = offset + k * pitch;
-      upper[k] = sine(x + ends.u1, up1);
+      const x1 = x + ends.u1;
+      const x2 = x + ends.u2;
+      const length1 = Math.sqrt(x1 * x1 + up1 * up1);
+      const length2 = Math.sqrt(x2 * x2 + up2 * up2);
+      upper[k] = x1 / length1;
+      upperCosine[k] = up1 / length1;
       // An end at the very receiver is seen the way the panel leans.
-      lower[k] = up2 === 0 && x + ends.u2 === 0 ? upper[k] : sine(x + ends.u2, up2);
+      lower[k] = length2 === 0 ? upper[k] : x2 / length2;
+      lowerCosine[k] = length2 === 0 ? upperCosine[k] : up2 / length2;
     }
     let from = -1;
     let opened = 0;

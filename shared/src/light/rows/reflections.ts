@@ -1,4 +1,4 @@
-import { firstKept } from './deposit.js';
+import { firstKept, type LitRange } from './deposit.js';
 import { elementCount, type Cut } from './elements.js';
 import { prepareExchange, type Exchange } from './exchange.js';
 import type { RowGeometry, RowOptics } from './geometry.js';
@@ -8,11 +8,11 @@ export type Quality = 'full' | 'preview';
 
 const CUTS = {
   full: { ground: 32, face: 24, directions: 180 },
-  preview: { ground: 12, face: 8, directions: 60 },
+  preview: { ground: 12, face: 16, directions: 60 },
 } satisfies Record<Quality, Cut>;
 
 /** Profile angles at which reflections are tabulated, per half turn. */
-const ANGLES = { full: 360, preview: 120 } as const;
+const ANGLES = { full: 540, preview: 180 } as const;
 
 /** Where one unit of horizontal light over one pitch of land ends; parts sum to 1. */
 export interface Balance {
@@ -22,9 +22,7 @@ export interface Balance {
   structure: number;
 }
 
-/** Reflected light by profile angle of the beam that causes it. */
-export interface Reflections {
-  angles: number;
+interface Tables {
   /** Per receiver and unit of horizontal beam x cos(profile angle): angles x receivers. */
   receivers: Float64Array;
   /** On the front and the rear of the panel, in the same measure: angles x 2. */
@@ -34,8 +32,20 @@ export interface Reflections {
    * of these what the ground got straight: angles x 4.
    */
   ends: Float64Array;
+}
+
+/** Reflected light and light balance by profile angle of the beam that causes it. */
+export interface Reflections extends Tables {
+  angles: number;
   /** Shares that panel faces and ground throw back: front, rear, ground. */
   back: [number, number, number];
+  /** Fill the row of an angle where that has not been done; to be called before reading it. */
+  want(angle: number): void;
+  /**
+   * The same for an even sky, per unit of its horizontal light; and what front and rear keep
+   * straight from it, per pitch.
+   */
+  sky: Tables & { straight: [number, number] };
 }
 
 /** What reflections are prepared from. */
@@ -58,9 +68,11 @@ function weigh(weights: Float64Array, settled: Float64Array): Float64Array {
   return out;
 }
 
-function dot(a: Float64Array, b: Float64Array): number {
+/** Sum over the ground strips and those face strips that a beam reaches. */
+function dot(a: Float64Array, b: Float64Array, ground: number, lit: LitRange): number {
   let sum = 0;
-  for (let i = 0; i < a.length; i += 1) sum += a[i] * b[i];
+  for (let i = 0; i < ground; i += 1) sum += a[i] * b[i];
+  for (let i = lit.from; i < lit.to; i += 1) sum += a[i] * b[i];
   return sum;
 }
 
@@ -109,45 +121,84 @@ function endWeights(cut: Cut, exchange: Exchange): Float64Array[] {
   return ends.map((weights) => weigh(weights, exchange.settled));
 }
 
+/** Light first kept by the elements from an even sky: beams from all angles, worth cos(a)/2 da each. */
+function firstKeptFromSky(
+  geometry: RowGeometry,
+  transmittance: number,
+  cut: Cut,
+  angles: number,
+): Float64Array {
+  const n = elementCount(cut);
+  const kept = new Float64Array(n);
+  const total = new Float64Array(n);
+  for (let a = 0; a < angles; a += 1) {
+    const from = (a / angles - 0.5) * Math.PI;
+    const to = ((a + 1) / angles - 0.5) * Math.PI;
+    const weight = (Math.sin(to) - Math.sin(from)) / 2;
+    firstKept(geometry, transmittance, cut, Math.tan((from + to) / 2), kept);
+    for (let i = 0; i < n; i += 1) total[i] += weight * kept[i];
+  }
+  return total;
+}
+
 /**
  * Follow reflections off both faces and the ground for beams from all profile angles.
  *
  * Values are held x cos(profile angle): per unit of horizontal light they grow without limit towards
- * the horizon and would not bear interpolation.
+ * the horizon and would not bear interpolation. Rows of the tables are filled when first wanted.
  */
 export function prepareReflections(input: ReflectionsInput, quality: Quality): Reflections {
   const { geometry, optics, positions } = input;
   const cut = CUTS[quality];
   const angles = ANGLES[quality];
   const exchange = prepareExchange(geometry, optics, cut);
-  const { transmittance, structureShade } = optics;
   const atReceivers = receiverWeights(input, cut, exchange, quality);
   const onFaces = faceWeights(input, cut, exchange);
-  const weights = endWeights(cut, exchange);
-  const count = positions.length;
-  const receivers = new Float64Array(angles * count);
-  const faces = new Float64Array(angles * 2);
-  const ends = new Float64Array(angles * 4);
-  const kept = new Float64Array(elementCount(cut));
   const direct = new Float64Array(elementCount(cut)).fill(1, 0, cut.ground);
-  for (let a = 0; a < angles; a += 1) {
-    const angle = -Math.PI / 2 + ((a + 0.5) / angles) * Math.PI;
-    firstKept(geometry, transmittance, cut, Math.tan(angle), kept);
-    const scale = Math.cos(angle);
-    for (let r = 0; r < count; r += 1) {
-      receivers[a * count + r] = dot(atReceivers[r], kept) * scale * (1 - structureShade);
-    }
-    for (let f = 0; f < 2; f += 1) faces[a * 2 + f] = dot(onFaces[f], kept) * scale;
-    for (let e = 0; e < 3; e += 1) ends[a * 4 + e] = dot(weights[e], kept) * scale;
-    ends[a * 4 + 3] = dot(direct, kept) * scale;
-  }
+  const ends = [...endWeights(cut, exchange), direct];
+  const count = positions.length;
+  const kept = new Float64Array(elementCount(cut));
+  const done = new Uint8Array(angles);
   const { reflected } = exchange;
-  const back: [number, number, number] = [
-    reflected[cut.ground],
-    reflected[cut.ground + cut.face],
-    reflected[0],
-  ];
-  return { angles, receivers, faces, ends, back };
+  const fill = (into: Tables, row: number, lit: LitRange, scale: number): void => {
+    const open = scale * (1 - optics.structureShade);
+    for (let r = 0; r < count; r += 1) {
+      into.receivers[row * count + r] = dot(atReceivers[r], kept, cut.ground, lit) * open;
+    }
+    for (let f = 0; f < 2; f += 1) {
+      into.faces[row * 2 + f] = dot(onFaces[f], kept, cut.ground, lit) * scale;
+    }
+    for (let e = 0; e < 4; e += 1) {
+      into.ends[row * 4 + e] = dot(ends[e], kept, cut.ground, lit) * scale;
+    }
+  };
+  const table = (rows: number): Tables => ({
+    receivers: new Float64Array(rows * count),
+    faces: new Float64Array(rows * 2),
+    ends: new Float64Array(rows * 4),
+  });
+  const beams = table(angles);
+  const straight = (face: number): number => {
+    const start = cut.ground + face * cut.face;
+    return kept.subarray(start, start + cut.face).reduce((sum, value) => sum + value, 0);
+  };
+  kept.set(firstKeptFromSky(geometry, optics.transmittance, cut, angles));
+  const sky = { ...table(1), straight: [straight(0), straight(1)] as [number, number] };
+  fill(sky, 0, { from: cut.ground, to: kept.length }, 1);
+  const want = (row: number): void => {
+    if (done[row] === 1) return;
+    done[row] = 1;
+    const angle = ((row + 0.5) / angles - 0.5) * Math.PI;
+    const lit = firstKept(geometry, optics.transmittance, cut, Math.tan(angle), kept);
+    fill(beams, row, lit, Math.cos(angle));
+  };
+  return {
+    ...beams,
+    angles,
+    back: [reflected[cut.ground], reflected[cut.ground + cut.face], reflected[0]],
+    want,
+    sky,
+  };
 }
 
 /** A tangent's two neighbours in the table, with weights per unit of horizontal light. */
@@ -158,12 +209,15 @@ export interface Neighbours {
   high: number;
 }
 
-export function neighbours(angles: number, tangent: number): Neighbours {
+export function neighbours(reflections: Reflections, tangent: number): Neighbours {
+  const { angles } = reflections;
   const angle = Math.atan(tangent);
   const at = (angle / Math.PI + 0.5) * angles - 0.5;
   const row = Math.min(Math.max(Math.floor(at), 0), angles - 1);
   const share = Math.min(Math.max(at - row, 0), 1);
   const next = Math.min(row + 1, angles - 1);
+  reflections.want(row);
+  reflections.want(next);
   const cosine = (index: number) => Math.sin(((index + 0.5) / angles) * Math.PI);
   const perHorizontal = 1 / ((1 - share) * cosine(row) + share * cosine(next));
   return { row, next, low: (1 - share) * perHorizontal, high: share * perHorizontal };
