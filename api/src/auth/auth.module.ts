@@ -1,10 +1,11 @@
 import { Module } from '@nestjs/common';
-import { APP_GUARD } from '@nestjs/core';
+import { APP_GUARD, DiscoveryModule } from '@nestjs/core';
 import { JwtModule } from '@nestjs/jwt';
 import { AuditModule } from '../audit/audit.module.js';
 import { AppConfig } from '../config/app-config.js';
 import { CooperativesModule } from '../cooperatives/cooperatives.module.js';
 import { MembersModule } from '../members/members.module.js';
+import { AccessCheck } from './access-check.js';
 import { AccessGuard } from './access.guard.js';
 import { AuthService } from './auth.service.js';
 import { LinkPrincipals } from './link-principals.js';
@@ -17,6 +18,7 @@ import { SignInThrottle } from './sign-in-throttle.js';
 @Module({
   imports: [
     AuditModule,
+    DiscoveryModule,
     CooperativesModule,
     MembersModule,
     JwtModule.registerAsync({
@@ -26,6 +28,7 @@ import { SignInThrottle } from './sign-in-throttle.js';
   ],
   controllers: [SessionController],
   providers: [
+    AccessCheck,
     AuthService,
     LinkPrincipals,
     SessionCookie,

@@ -24,6 +24,7 @@ export const PROBLEMS = {
   'too-many': { status: 429, title: 'Too many attempts' },
   unexpected: { status: 500, title: 'Something went wrong here' },
   'database-unavailable': { status: 503, title: 'The data cannot be reached just now' },
+  'not-ready': { status: 503, title: 'The server is not ready' },
   'storage-full': { status: 507, title: 'The server has no room left' },
 } as const;
 

@@ -9,6 +9,7 @@ import { AppConfig } from '../config/app-config.js';
 import { contractPipe } from './contract-pipe.js';
 import { refuseCrossSite } from './cross-site.js';
 import { Log } from './log.js';
+import { serveDocs } from './openapi.js';
 import { servePages } from './pages.js';
 import { ProblemFilter } from './problem-filter.js';
 
@@ -106,5 +107,6 @@ export function configureHttp(app: NestExpressApplication): void {
   app.setGlobalPrefix('api');
   app.useGlobalPipes(contractPipe());
   app.useGlobalFilters(new ProblemFilter(log));
+  serveDocs(app);
   app.enableShutdownHooks();
 }

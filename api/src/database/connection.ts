@@ -1,7 +1,9 @@
 import type Sqlite from 'better-sqlite3';
-import { DataSource } from 'typeorm';
+import { DataSource, type MigrationInterface } from 'typeorm';
 import { ENTITIES } from './entities.js';
-import { MIGRATIONS } from './migration-list.js';
+
+/** A migration as its runner takes it. */
+export type MigrationClass = new () => MigrationInterface;
 
 const BUSY_TIMEOUT_MS = 5000;
 
@@ -15,13 +17,13 @@ function prepare(connection: Sqlite.Database): void {
 }
 
 /** The connection all writes and the migrations go through. */
-export function writerSource(file: string): DataSource {
+export function writerSource(file: string, migrations: readonly MigrationClass[] = []): DataSource {
   return new DataSource({
     type: 'better-sqlite3',
     database: file,
     timeout: BUSY_TIMEOUT_MS,
     entities: ENTITIES,
-    migrations: MIGRATIONS,
+    migrations: [...migrations],
     migrationsTableName: 'migrations',
     migrationsTransactionMode: 'each',
     prepareDatabase: prepare,

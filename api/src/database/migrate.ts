@@ -1,7 +1,7 @@
 import { copyFileSync, existsSync, mkdirSync, readdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import type { DataSource } from 'typeorm';
-import { writerSource } from './connection.js';
+import { writerSource, type MigrationClass } from './connection.js';
 import { MIGRATIONS } from './migration-list.js';
 
 const KEPT_SNAPSHOTS = 5;
@@ -20,8 +20,8 @@ async function appliedNames(source: DataSource): Promise<string[]> {
   return rows.map((row) => row.name);
 }
 
-function refuseNewer(applied: readonly string[]): void {
-  const known = new Set(MIGRATIONS.map((migration) => migration.name));
+function refuseNewer(applied: readonly string[], migrations: readonly MigrationClass[]): void {
+  const known = new Set(migrations.map((migration) => migration.name));
   const foreign = applied.filter((name) => !known.has(name));
   if (foreign.length > 0) {
     throw new MigrationError(
@@ -72,13 +72,17 @@ async function runPending(source: DataSource): Promise<void> {
  *
  * @throws MigrationError when the file is newer than this program or a migration fails
  */
-export async function migrate(file: string, now: Date): Promise<void> {
-  const source = await writerSource(file).initialize();
+export async function migrate(
+  file: string,
+  now: Date,
+  migrations: readonly MigrationClass[] = MIGRATIONS,
+): Promise<void> {
+  const source = await writerSource(file, migrations).initialize();
   let snapshot: string | null = null;
   try {
     const applied = await appliedNames(source);
-    refuseNewer(applied);
-    if (applied.length === MIGRATIONS.length) return;
+    refuseNewer(applied, migrations);
+    if (applied.length === migrations.length) return;
     if (applied.length > 0) snapshot = await takeSnapshot(source, file, now);
     await runPending(source);
   } catch (cause) {

@@ -1,7 +1,7 @@
 import { farmScope, type MemberPrincipal } from '@furrowlight/shared/access/may';
 import type { Farm, FarmInput, FarmPatch } from '@furrowlight/shared/contract/farms';
 import { Injectable } from '@nestjs/common';
-import { IsNull, Not, type EntityManager, type FindOptionsWhere } from 'typeorm';
+import { IsNull, LessThan, Not, type EntityManager, type FindOptionsWhere } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Clock } from '../common/clock.js';
 import { DomainError, invalid, notFound, requireVersion } from '../common/domain-error.js';
@@ -149,6 +149,13 @@ export class FarmsService {
       await this.audit.record(manager, principal, 'restored', subject(row));
       return (await this.describer(row.cooperativeId))(row);
     });
+  }
+
+  /** Remove for good what was put into the bin before an instant. */
+  async purge(before: string): Promise<void> {
+    await this.database.write((manager) =>
+      manager.delete(FarmEntity, { deletedAt: LessThan(before) }),
+    );
   }
 
   async removed(principal: MemberPrincipal): Promise<RemovedFarm[]> {

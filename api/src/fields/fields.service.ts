@@ -1,7 +1,7 @@
 import type { LinkPrincipal, MemberPrincipal } from '@furrowlight/shared/access/may';
 import type { Field, FieldInput, FieldPatch, LonLat } from '@furrowlight/shared/contract/fields';
 import { Injectable } from '@nestjs/common';
-import { In, IsNull, Not, type EntityManager } from 'typeorm';
+import { In, IsNull, LessThan, Not, type EntityManager } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Clock } from '../common/clock.js';
 import { notFound, requireVersion } from '../common/domain-error.js';
@@ -157,6 +157,13 @@ export class FieldsService {
       await this.audit.record(manager, principal, 'restored', subject(row));
       return this.describe(manager, row, farm.name);
     });
+  }
+
+  /** Remove for good what was put into the bin before an instant. */
+  async purge(before: string): Promise<void> {
+    await this.database.write((manager) =>
+      manager.delete(FieldEntity, { deletedAt: LessThan(before) }),
+    );
   }
 
   async removed(principal: MemberPrincipal): Promise<RemovedField[]> {
