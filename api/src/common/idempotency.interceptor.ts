@@ -10,6 +10,7 @@ import { LessThan, type EntityManager } from 'typeorm';
 import { Database } from '../database/database.js';
 import { Clock } from './clock.js';
 import { DomainError } from './domain-error.js';
+import { openAnswer, sealAnswer } from './answer-seal.js';
 import { IdempotencyKeyEntity } from './idempotency-key.entity.js';
 import type { GuardedRequest } from './request.js';
 
@@ -39,19 +40,18 @@ export class IdempotencyInterceptor implements NestInterceptor {
       );
     }
     const { memberId } = request.principal;
-    const requestHash = createHash('sha256')
-      .update(`${request.originalUrl}\n${JSON.stringify(request.body ?? null)}`)
-      .digest('hex');
+    const keyHash = sha256(key);
+    const requestHash = sha256(`${request.originalUrl}\n${JSON.stringify(request.body ?? null)}`);
     return from(
       this.database.write(async (manager) => {
-        const earlier = await this.earlier(manager, memberId, key);
-        if (earlier) return replay(earlier, requestHash);
+        const earlier = await this.earlier(manager, memberId, keyHash);
+        if (earlier) return replay(earlier, requestHash, key);
         const answer = await lastValueFrom(next.handle(), { defaultValue: null });
         await manager.insert(IdempotencyKeyEntity, {
           memberId,
-          key,
+          key: keyHash,
           requestHash,
-          answer: JSON.stringify(answer ?? null),
+          answer: sealAnswer(JSON.stringify(answer ?? null), key),
           createdAt: this.clock.instant(),
         });
         return answer;
@@ -66,12 +66,14 @@ export class IdempotencyInterceptor implements NestInterceptor {
   }
 }
 
-function replay(earlier: IdempotencyKeyEntity, requestHash: string): unknown {
+const sha256 = (text: string) => createHash('sha256').update(text).digest('hex');
+
+function replay(earlier: IdempotencyKeyEntity, requestHash: string, key: string): unknown {
   if (earlier.requestHash !== requestHash) {
     throw new DomainError(
       'key-reused',
       'This Idempotency-Key already stands for another request. Use a new one.',
     );
   }
-  return JSON.parse(earlier.answer) as unknown;
+  return JSON.parse(openAnswer(earlier.answer, key)) as unknown;
 }

@@ -11,7 +11,8 @@ const METHODS = ['get', 'post', 'patch', 'put', 'delete'] as const;
 /** JSON Schema 2020-12, the dialect of OpenAPI 3.1, without zod's own extras. */
 function toJsonSchema(schema: unknown, io: 'input' | 'output') {
   if (!(schema instanceof z.ZodType)) return undefined;
-  const { $schema: _, ...json } = z.toJSONSchema(schema, { io, unrepresentable: 'any' });
+  const json = z.toJSONSchema(schema, { io, unrepresentable: 'any' });
+  delete json.$schema;
   const plain: Schemas[string] = JSON.parse(JSON.stringify(json));
   return { schema: plain };
 }
