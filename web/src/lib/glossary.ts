@@ -24,6 +24,10 @@ export const GLOSSARY = {
     name: 'Land equivalent ratio',
     text: 'How much land would be needed to grow the same crop and make the same electricity apart from each other. Above 1, sharing the land pays.',
   },
+  'R:FR': {
+    name: 'Red to far-red ratio',
+    text: 'Photons near 660 nm over photons near 730 nm. About 1.1 in daylight; leaves lower it, opaque panels hardly do.',
+  },
   albedo: {
     name: 'Albedo',
     text: 'Share of light the ground throws back. Green crops about 0.20, dry straw 0.30, dark wet soil 0.10, fresh snow 0.80.',
