@@ -1,5 +1,6 @@
 import { DEG } from './angles.js';
-import { prepareBeamShade } from './rows/beam.js';
+import { prepareBeamPassage } from './rows/along-gaps.js';
+import { prepareBeamShade, sortReceivers } from './rows/beam.js';
 import { prepareEndlessRows, type EndlessRows, type EndlessRowsInput } from './rows/endless.js';
 import { planeFactor, type RowGeometry } from './rows/geometry.js';
 import type { PanelLight } from './rows/panel-light.js';
@@ -93,6 +94,7 @@ export function turningRowLight(input: EndlessRowsInput, maxRotation: number): R
     );
   }
   const count = input.positions.length;
+  const receivers = sortReceivers(input.positions, input.geometry.pitch);
   const direct = new Float64Array(count);
   const reflected = new Float64Array(count);
   const panels = [noPanel(), noPanel()];
@@ -120,11 +122,14 @@ export function turningRowLight(input: EndlessRowsInput, maxRotation: number): R
       const shade = prepareBeamShade(
         geometry,
         input.optics.transmittance,
-        input.positions,
+        receivers,
         input.receiverHeight,
         input.discSun ?? true,
       );
-      shade.shares(tangent, sunAltitude, direct);
+      const through = input.gaps
+        ? prepareBeamPassage(geometry, input.optics.transmittance, input.gaps)
+        : undefined;
+      shade.shares(tangent, sunAltitude, direct, through?.(tangent, sunAltitude));
       reflected.fill(0);
       a.addBeamReflected(tangent, 1 - share, reflected);
       b.addBeamReflected(tangent, share, reflected);

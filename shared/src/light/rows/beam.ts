@@ -38,15 +38,21 @@ function firstFrom(sorted: Float64Array, x: number): number {
   return low;
 }
 
-/** Receivers of one geometry and height, sorted by their place within a pitch. */
-interface Receivers {
+/** Receivers across rows of one pitch, sorted by their place within it. */
+export interface Receivers {
   /** Places in pitches, 0 to 1, rising. */
   places: Float64Array;
   /** Index among the caller's receivers. */
   order: Int32Array;
 }
 
-function sortReceivers(positions: Float64Array, pitch: number): Receivers {
+/**
+ * Sort receivers once for all shades of rows with this pitch.
+ *
+ * @param positions receivers across the rows, m
+ * @param pitch distance between rows, m
+ */
+export function sortReceivers(positions: Float64Array, pitch: number): Receivers {
   const within = positions.map((u) => u / pitch - Math.floor(u / pitch));
   const order = Int32Array.from(within, (_, i) => i).sort((a, b) => within[a] - within[b]);
   return { places: Float64Array.from(order, (i) => within[i]), order };
@@ -110,14 +116,14 @@ function soften(
  * receiver span a plane along the row, and the disc is cut by it at the sun's angle from that plane.
  * Source: own derivation from the plane geometry.
  *
- * @param positions receivers across the rows, m
+ * @param receivers sortReceivers of the same pitch
  * @param z0 receiver height, m
  * @param discSun false for a point sun
  */
 export function prepareBeamShade(
   geometry: RowGeometry,
   transmittance: number,
-  positions: Float64Array,
+  receivers: Receivers,
   z0: number,
   discSun: boolean,
 ): BeamShade {
@@ -126,7 +132,6 @@ export function prepareBeamShade(
     return { shares: (_tangent, _altitude, out) => out.fill(1) };
   }
   const ends = inPitches(above, geometry.pitch, z0);
-  const receivers = sortReceivers(positions, geometry.pitch);
   const powers = lightThrough(transmittance);
   const shares = (
     tangent: number,

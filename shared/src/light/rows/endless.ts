@@ -1,5 +1,12 @@
 import { InputError, requireWithin } from '../../errors.js';
-import { lightThrough, prepareBeamShade } from './beam.js';
+import {
+  meanRowOptics,
+  prepareBeamPassage,
+  prepareSkyPassage,
+  requireGaps,
+  type AlongRowGaps,
+} from './along-gaps.js';
+import { prepareBeamShade, sortReceivers } from './beam.js';
 import {
   profileTangent,
   requireRowGeometry,
@@ -22,7 +29,7 @@ import {
   type Quality,
   type Reflections,
 } from './reflections.js';
-import { evenSky, prepareSkyView } from './sky-view.js';
+import { prepareSkyView } from './sky-view.js';
 
 /** What endless rows are prepared from. */
 export interface EndlessRowsInput {
@@ -32,6 +39,8 @@ export interface EndlessRowsInput {
   receiverHeight: number;
   /** Receivers across the rows from a row's centre line, positive on the front side, m. */
   positions: Float64Array;
+  /** Gaps between modules along the rows; light is then the mean along the row. */
+  gaps?: AlongRowGaps;
   /** Soften shadow edges by the sun's disc; default true. */
   discSun?: boolean;
   /** `preview` cuts surfaces and directions more coarsely; default `full`. */
@@ -78,30 +87,37 @@ function addReflected(
  * Beam shadows are exact (softened by the sun's disc), the sky's light is exact over all rows, and
  * reflections of both faces and the ground are followed through all orders on strips.
  *
+ * With gaps along the row, values are means along it; reflections then take each row as evenly
+ * filled.
+ *
  * @throws InputError naming the part of the input that is out of range
  * Validity: long rows (away from their ends), level ground, panels without thickness, diffuse
  * reflection. The receiver itself blocks nothing.
  */
 export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
-  const { geometry, optics, positions, receiverHeight } = input;
+  const { geometry, positions, receiverHeight, gaps } = input;
   requireRowGeometry(geometry);
-  requireRowOptics(optics);
+  requireRowOptics(input.optics);
+  if (gaps) requireGaps(gaps);
   requireWithin('receiverHeight', receiverHeight, 0, 1e6, 'm');
   if (positions.length === 0) throw new InputError('positions', 'At least one position is needed.');
   const quality = input.quality ?? 'full';
   const count = positions.length;
-  const open = 1 - optics.structureShade;
-  const reflections = prepareReflections(input, quality);
+  const open = 1 - input.optics.structureShade;
+  const optics = meanRowOptics(input.optics, gaps);
+  const reflections = prepareReflections({ ...input, optics }, quality);
+  const { transmittance } = input.optics;
+  const passage = prepareBeamPassage(geometry, transmittance, gaps);
   const shade = prepareBeamShade(
     geometry,
     optics.transmittance,
-    positions,
+    sortReceivers(positions, geometry.pitch),
     receiverHeight,
     input.discSun ?? true,
   );
 
-  const part = evenSky(lightThrough(optics.transmittance));
-  const skyView = prepareSkyView(geometry, receiverHeight, part, quality);
+  const skyPassage = prepareSkyPassage(geometry, transmittance, gaps);
+  const skyView = prepareSkyView(geometry, receiverHeight, skyPassage, quality);
   const skyReflected = reflections.sky.receivers;
   const rows: EndlessRows = {
     sky: positions.map((u, i) => skyView.share(u) * open + skyReflected[i]),
@@ -110,7 +126,7 @@ export function prepareEndlessRows(input: EndlessRowsInput): EndlessRows {
     skyBalance: skyBalance(reflections, optics),
     tangent: (sunAzimuth, sunAltitude) => profileTangent(geometry, sunAzimuth, sunAltitude),
     beam: (tangent, sunAltitude, out) => {
-      shade.shares(tangent, sunAltitude, out);
+      shade.shares(tangent, sunAltitude, out, passage(tangent, sunAltitude));
       if (open < 1) for (let i = 0; i < count; i += 1) out[i] *= open;
     },
     addBeamReflected: (tangent, weight, out) => {

@@ -12,12 +12,6 @@ const HAZE_STEPS = 8;
  */
 export type SkyPart = (panels: number, from: number, to: number) => number;
 
-/** An even sky through panels of one transmittance: light is spread evenly over the sine. */
-export function evenSky(through: Float64Array): SkyPart {
-  const most = through.length - 1;
-  return (panels, from, to) => (through[panels < most ? panels : most] * (to - from)) / 2;
-}
-
 /** Sky seen by receivers at one height. */
 export interface SkyView {
   /** Share of the sky's light that reaches the receiver at u, without reflections. */
