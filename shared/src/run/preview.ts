@@ -31,6 +31,8 @@ export interface Preview {
   positionsM: number[];
   /** Season PAR by strip, share of open field. */
   share: number[];
+  /** Share of open field by part of the year (24 equal parts from 1 January) and strip. */
+  weave: number[][];
   openDli: number;
   meanDli: number;
   darkestDli: number;
@@ -146,8 +148,13 @@ export function previewLayout(
     state.suns = part.suns;
     for (let i = 0; i < part.suns.count; i += 1) countSun(state, part.day, i);
   }
-  spreadOverSeason(state, place, season.firstDay, season.days);
   const { sums } = state.planes[0];
+  const weave = place.parts.map(({ day }) =>
+    Array.from(sums.par.subarray(day * positions, (day + 1) * positions), (par) =>
+      sums.open[day] > 0 ? par / sums.open[day] : 1,
+    ),
+  );
+  spreadOverSeason(state, place, season.firstDay, season.days);
   const budget = periodBudget(sums, 'Season', 0, sums.days);
   const perDay = sums.days / season.days;
   const open = budget.openDli * sums.days;
@@ -158,6 +165,7 @@ export function previewLayout(
     share: Array.from(periodByPosition(sums, 0, sums.days), (value) =>
       open > 0 ? value / open : 1,
     ),
+    weave,
     openDli: budget.openDli * perDay,
     meanDli: budget.meanDli * perDay,
     darkestDli: budget.darkestDli * perDay,
