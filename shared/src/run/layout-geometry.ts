@@ -1,6 +1,5 @@
 import type { Layout } from '../contract/layout.js';
 import type { Site } from '../contract/run.js';
-import { InputError } from '../errors.js';
 import { toRadians } from '../light/angles.js';
 import type { EndlessRowsInput } from '../light/rows/endless.js';
 import { tiltAgainstSlope, type Slope } from '../light/slope.js';
@@ -17,24 +16,19 @@ export function stripMiddles(pitchM: number, count: number): Float64Array {
 }
 
 /** Height of the middle of the slant, m: the clear height is that of the lowest edge at its worst. */
-export function midHeightM(layout: Layout): number {
+function midHeightM(layout: Layout, tilt: number): number {
   const worst =
-    layout.kind === 'single-axis-tracker' ? (layout.tracker?.maxAngleDeg ?? 0) : layout.tiltDeg;
-  return layout.clearHeightM + (layout.collectorWidthM / 2) * Math.sin(toRadians(worst));
+    layout.kind === 'single-axis-tracker' ? toRadians(layout.tracker?.maxAngleDeg ?? 0) : tilt;
+  return layout.clearHeightM + (layout.collectorWidthM / 2) * Math.abs(Math.sin(worst));
 }
 
-/**
- * Share of the row's length that modules fill; gaps between modules let light through.
- * The endless-row form spreads them evenly along the row.
- */
+/** Share of the row's length that modules fill; gaps between modules let light through. */
 export function filledShare(layout: Layout): number {
   return layout.gaps ? layout.module.lengthM / (layout.module.lengthM + layout.gaps.gapM) : 1;
 }
 
 /**
  * Endless rows of a layout on a site's own ground plane, at one canopy height.
- *
- * @throws InputError naming the part of the layout that cannot stand there
  */
 export function rowsOfLayout(
   layout: Layout,
@@ -45,31 +39,26 @@ export function rowsOfLayout(
   const facing = toRadians(layout.azimuthDeg);
   const fixed = layout.kind !== 'single-axis-tracker';
   const against = fixed ? tiltAgainstSlope(toRadians(layout.tiltDeg), facing, groundOf(site)) : 0;
-  if (against < 0) {
-    throw new InputError(
-      'layout.tiltDeg',
-      'The ground falls more steeply than the panels tilt: raise the tilt or turn the rows.',
-    );
-  }
-  const { module } = layout;
-  const filled = filledShare(layout);
-  const transmittance = 1 - filled * (1 - module.transmittance);
+  const { module, gaps } = layout;
   return {
     geometry: {
       pitch: layout.pitchM,
       width: layout.collectorWidthM,
-      tilt: Math.min(against, Math.PI / 2),
-      midHeight: midHeightM(layout),
+      tilt: against,
+      midHeight: midHeightM(layout, against),
       surfaceAzimuth: facing,
     },
     optics: {
-      transmittance,
-      frontReflectance: module.frontReflectance * filled,
-      rearReflectance: module.rearReflectance * filled,
+      transmittance: module.transmittance,
+      frontReflectance: module.frontReflectance,
+      rearReflectance: module.rearReflectance,
       albedo: site.albedo,
       structureShade: layout.structureShade,
     },
     receiverHeight,
     positions,
+    gaps: gaps
+      ? { moduleLength: module.lengthM, gapLength: gaps.gapM, checkerboard: gaps.checkerboard }
+      : undefined,
   };
 }

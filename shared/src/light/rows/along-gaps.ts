@@ -69,7 +69,7 @@ function fillChain(filled: number, transmittance: number, shift: number, out: Fl
 
 /** Vertical distance between the meetings of a ray with one row and the next, m. */
 const stepUp = (geometry: RowGeometry, tangent: number): number =>
-  (geometry.pitch * Math.sin(geometry.tilt)) /
+  (geometry.pitch * Math.abs(Math.sin(geometry.tilt))) /
   Math.max(Math.abs(planeFactor(geometry, tangent)), 1e-9);
 
 /** Sky light through n rows, angles x rows: means over the directions along the row. */

@@ -1,5 +1,5 @@
 import { elementCount, stripAt, type Cut } from './elements.js';
-import { planeFactor, type RowGeometry } from './geometry.js';
+import { planeFactor, upperSide, type RowGeometry } from './geometry.js';
 
 /** Light weaker than this share of what set out is no longer followed. */
 const FAINTEST = 1e-15;
@@ -19,18 +19,22 @@ interface Direction {
   /** Ground place (in pitches, from u = 0) of the line through a panel's upper edge. */
   edge: number;
   /** +1 where going down the slant moves the line's foot to +u. */
-  side: 1 | -1;
+  side: number;
+  /** The lines come from the front side of the panel. */
+  onFront: boolean;
 }
 
 function directionAt(geometry: RowGeometry, tangent: number): Direction {
   const { width, tilt, midHeight, pitch } = geometry;
   const factor = planeFactor(geometry, tangent);
-  const upperHeight = midHeight + (width / 2) * Math.sin(tilt);
-  const upper = (-width / 2) * Math.cos(tilt) - upperHeight * tangent;
+  const turn = upperSide(geometry);
+  const upperHeight = midHeight + (width / 2) * Math.abs(Math.sin(tilt));
+  const upper = (-turn * width * Math.cos(tilt)) / 2 - upperHeight * tangent;
   return {
     depth: (width * Math.abs(factor)) / pitch,
     edge: upper / pitch,
-    side: factor >= 0 ? 1 : -1,
+    side: factor >= 0 ? turn : -turn,
+    onFront: factor >= 0,
   };
 }
 
@@ -118,11 +122,11 @@ export function prepareTransfers(
     const from = -Math.PI / 2 + d * step;
     const weight = (Math.sin(from + step) - Math.sin(from)) / 2;
     const direction = directionAt(geometry, Math.tan(from + step / 2));
-    const { depth, edge, side } = direction;
+    const { depth, edge, side, onFront } = direction;
     const most = Math.floor(depth) + 2;
     if (2 * most + 1 > met.length) met = new Int32Array(4 * most);
-    const upperFace = cut.ground + (side > 0 ? 0 : cut.face);
-    const lowerFace = cut.ground + (side > 0 ? cut.face : 0);
+    const upperFace = cut.ground + (onFront ? 0 : cut.face);
+    const lowerFace = cut.ground + (onFront ? cut.face : 0);
     const places = breaks(cut, direction, scratch);
     for (let b = 1; b < places.length; b += 1) {
       const width = places[b] - places[b - 1];

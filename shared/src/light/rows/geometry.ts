@@ -4,14 +4,17 @@ import { InputError, requireWithin } from '../../errors.js';
  * Endless parallel rows on level ground, in the plane across them.
  *
  * `u` runs across the rows, positive the way the front face looks; row centres stand at multiples
- * of the pitch. The lower edge is on the +u side. Metres and radians.
+ * of the pitch. With a positive tilt the lower edge is on the +u side. Metres and radians.
  */
 export interface RowGeometry {
   /** Distance between row centre lines, m. */
   pitch: number;
   /** Slant width of the panel, lower to upper edge, m. */
   width: number;
-  /** Tilt from horizontal, radians, 0 to pi/2. */
+  /**
+   * Tilt from the ground plane, radians. Positive: the edge on the front side is the lower one. On
+   * falling ground a flat panel leans the other way (below 0) and a fence may overhang (above pi/2).
+   */
   tilt: number;
   /** Height of the middle of the slant above ground, m. */
   midHeight: number;
@@ -36,13 +39,13 @@ export function requireRowGeometry(geometry: RowGeometry): void {
   const { pitch, width, tilt, midHeight } = geometry;
   requireWithin('pitch', pitch, 0.1, 1000, 'm');
   requireWithin('width', width, 0, 100, 'm');
-  requireWithin('tilt', tilt, 0, Math.PI / 2 + 1e-9, 'rad');
+  requireWithin('tilt', tilt, -Math.PI / 2, Math.PI, 'rad');
   requireWithin('midHeight', midHeight, 0, 1000, 'm');
   requireWithin('surfaceAzimuth', geometry.surfaceAzimuth, -10, 10, 'rad');
-  if (width * Math.cos(tilt) > pitch + 1e-9) {
+  if (width * Math.abs(Math.cos(tilt)) > pitch + 1e-9) {
     throw new InputError('pitch', 'Rows collide: the pitch is smaller than the panel is wide.');
   }
-  if (!(midHeight - (width / 2) * Math.sin(tilt) >= -1e-9)) {
+  if (!(midHeight - (width / 2) * Math.abs(Math.sin(tilt)) >= -1e-9)) {
     throw new InputError('midHeight', 'The lower panel edge would stand in the ground.');
   }
 }
@@ -97,11 +100,14 @@ export interface PanelEnds {
   above: boolean;
 }
 
+/** +1 where the upper edge is on the -u side (tilt above 0), else -1. */
+export const upperSide = (geometry: RowGeometry): 1 | -1 => (geometry.tilt < 0 ? -1 : 1);
+
 /** Ends of the panel of row 0 above height `z0` (upper end first). */
 export function panelEndsAbove(geometry: RowGeometry, z0: number): PanelEnds {
   const half = geometry.width / 2;
-  const c = Math.cos(geometry.tilt);
-  const s = Math.sin(geometry.tilt);
+  const c = Math.cos(geometry.tilt) * upperSide(geometry);
+  const s = Math.abs(Math.sin(geometry.tilt));
   const u1 = -half * c;
   const z1 = geometry.midHeight + half * s;
   let u2 = half * c;

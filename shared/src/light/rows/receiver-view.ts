@@ -1,4 +1,4 @@
-import { panelEndsAbove, type RowGeometry } from './geometry.js';
+import { panelEndsAbove, upperSide, type RowGeometry } from './geometry.js';
 
 /** Rows farther than this many heights fill under 2e-3 (preview) or 2e-4 (full) of the view. */
 const REACH = { full: 60, preview: 18 } as const;
@@ -49,6 +49,7 @@ export function prepareViewSweep(
   const up2 = ends.z2 - z0;
   const c = Math.cos(geometry.tilt);
   const s = Math.sin(geometry.tilt);
+  const turn = upperSide(geometry);
   const rows = Math.ceil((up1 * REACH[quality]) / pitch) + 2;
   const total = 2 * rows + 1;
   const upper = new Float64Array(total);
@@ -62,7 +63,8 @@ export function prepareViewSweep(
   const atStrip = (k: number, q: number): number => {
     const share = Math.min(q, seen) / strips;
     const down = share * geometry.width;
-    return sine(offset + k * pitch + ends.u1 + down * c, Math.max(up1 - down * s, 0));
+    const x = offset + k * pitch + ends.u1 + turn * down * c;
+    return sine(x, Math.max(up1 - turn * down * s, 0));
   };
 
   /**
@@ -128,7 +130,7 @@ export function prepareViewSweep(
     const count = last - first + 1;
     let scale = 0.5;
     for (let n = 0; n < count && scale > FAINTEST; n += 1) {
-      give(across > 0 ? first + n : last - n, from, to, scale, base, out);
+      give(across * turn > 0 ? first + n : last - n, from, to, scale, base, out);
       scale *= transmittance;
     }
   };
