@@ -18,8 +18,7 @@ export function servePages(webDir: string): Router {
   router.use(express.static(webDir, { index: false, maxAge: '1h' }));
   router.use((request: Request, response: Response, next: NextFunction) => {
     if (request.method !== 'GET' && request.method !== 'HEAD') return next();
-    const page = /^\/r(\/|$)/.test(request.path) ? 'review.html' : 'index.html';
-    const file = path.join(webDir, page);
+    const file = path.join(webDir, 'index.html');
     if (!existsSync(file)) return next();
     response.setHeader('Cache-Control', 'no-cache');
     response.sendFile(file, { cacheControl: false });
