@@ -158,12 +158,12 @@ export class ScenariosService implements OnModuleInit {
 
   /** A run, for whoever reaches its scenario. */
   async getRun(principal: MemberPrincipal, runId: string): Promise<Run> {
-    await this.reach(this.database.read, principal, await this.runs.scenarioOf(principal, runId));
+    await this.requireRun(principal, runId);
     return this.runs.get(principal, runId);
   }
 
   async cancelRun(principal: MemberPrincipal, runId: string): Promise<Run> {
-    await this.reach(this.database.read, principal, await this.runs.scenarioOf(principal, runId));
+    await this.requireRun(principal, runId);
     return this.runs.cancel(principal, runId);
   }
 
@@ -174,6 +174,14 @@ export class ScenariosService implements OnModuleInit {
   ): Promise<{ scenario: Scenario; result: ScenarioResult }> {
     const scenario = await this.get(principal, id);
     return { scenario, result: await this.runs.result(id) };
+  }
+
+  /** A run whose scenario is out of reach is missing like any other. */
+  private async requireRun(principal: MemberPrincipal, runId: string): Promise<void> {
+    const { cooperativeId } = principal;
+    const id = await this.runs.scenarioOf(principal, runId);
+    const row = await this.database.read.findOneBy(ScenarioEntity, { id, cooperativeId });
+    if (!row || !(await this.fields.isReachable(principal, row.fieldId))) throw notFound('run');
   }
 
   private async reach(manager: EntityManager, principal: MemberPrincipal, id: string) {
