@@ -1,10 +1,10 @@
-import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { toRadians } from '../../src/light/angles.js';
 import { prepareEndlessRows, type EndlessRows } from '../../src/light/rows/endless.js';
 import { shadedShare, type RowGeometry } from '../../src/light/rows/geometry.js';
 import type { PanelLight } from '../../src/light/rows/panel-light.js';
 import { ErrorTally, type Group } from '../quantity.js';
+import { numberOf, readTable, type TableRow } from '../read-table.js';
 
 const NAME = 'rows2d';
 const POINTS = 'physics/rows2d_points.csv';
@@ -13,33 +13,12 @@ const GEOMETRIES = 'physics/rows2d_geoms.csv';
 /** Receivers closer to a shadow edge than this may fall either way by rounding, m. */
 const EDGE = 1e-6;
 
-type Row = Record<string, string>;
-
-function readTable(path: string): Row[] {
-  const lines = readFileSync(path, 'utf8')
-    .split('\n')
-    .filter((line) => line !== '' && !line.startsWith('#'));
-  const names = lines[0].split(',');
-  return lines.slice(1).map((line) => {
-    const cells = line.split(',');
-    return Object.fromEntries(names.map((name, i) => [name, cells[i]]));
-  });
-}
-
-function number(row: Row, name: string): number {
-  const value = Number(row[name]);
-  if (row[name] === undefined || row[name] === '' || !Number.isFinite(value)) {
-    throw new SyntaxError(`${name} is not a number in ${row.geom ?? 'a row'}`);
-  }
-  return value;
-}
-
-const geometryOf = (row: Row): RowGeometry => ({
-  pitch: number(row, 'pitch_m'),
-  width: number(row, 'collector_width_m'),
-  tilt: toRadians(number(row, 'tilt')),
-  midHeight: number(row, 'hub_height_m'),
-  surfaceAzimuth: toRadians(number(row, 'surface_azimuth')),
+const geometryOf = (row: TableRow): RowGeometry => ({
+  pitch: numberOf(row, 'pitch_m'),
+  width: numberOf(row, 'collector_width_m'),
+  tilt: toRadians(numberOf(row, 'tilt')),
+  midHeight: numberOf(row, 'hub_height_m'),
+  surfaceAzimuth: toRadians(numberOf(row, 'surface_azimuth')),
 });
 
 const BLACK = {
@@ -51,9 +30,9 @@ const BLACK = {
 };
 
 /** Sun of the geometry's line: altitude and the tangent that the rows see it under. */
-function sunOf(row: Row, rows: EndlessRows): { altitude: number; tangent: number } {
-  const altitude = toRadians(90 - number(row, 'sun_zenith'));
-  return { altitude, tangent: rows.tangent(toRadians(number(row, 'sun_azimuth')), altitude) };
+function sunOf(row: TableRow, rows: EndlessRows): { altitude: number; tangent: number } {
+  const altitude = toRadians(90 - numberOf(row, 'sun_zenith'));
+  return { altitude, tangent: rows.tangent(toRadians(numberOf(row, 'sun_azimuth')), altitude) };
 }
 
 function tallies() {
@@ -68,33 +47,37 @@ function tallies() {
   };
 }
 
-function compareGeometry(tally: ReturnType<typeof tallies>, row: Row, points: Row[]): void {
+function compareGeometry(
+  tally: ReturnType<typeof tallies>,
+  row: TableRow,
+  points: TableRow[],
+): void {
   const geometry = geometryOf(row);
   const rows = prepareEndlessRows({
     geometry,
     optics: BLACK,
     receiverHeight: 0,
-    positions: Float64Array.from(points, (point) => number(point, 'u_m')),
+    positions: Float64Array.from(points, (point) => numberOf(point, 'u_m')),
     discSun: false,
   });
   const { altitude, tangent } = sunOf(row, rows);
   const shares = new Float64Array(points.length);
   rows.beam(tangent, altitude, shares);
   points.forEach((point, i) => {
-    tally.sky.add(rows.sky[i] - number(point, 'svf_exact'));
-    if (number(point, 'dist_to_shadow_edge_m') < EDGE) return;
-    tally.state.add(shares[i] - number(point, 'sunlit'));
+    tally.sky.add(rows.sky[i] - numberOf(point, 'svf_exact'));
+    if (numberOf(point, 'dist_to_shadow_edge_m') < EDGE) return;
+    tally.state.add(shares[i] - numberOf(point, 'sunlit'));
   });
-  const wantTangent = number(row, 'tan_proj_zenith_toward_az');
+  const wantTangent = numberOf(row, 'tan_proj_zenith_toward_az');
   tally.tangent.add((tangent - wantTangent) / Math.max(1, Math.abs(wantTangent)));
-  tally.shaded.add(shadedShare(geometry, tangent) - (1 - number(row, 'unshaded_fraction_own')));
-  tally.lit.add(rows.litShare(tangent) - (1 - number(row, 'row_shaded_fraction_own')));
-  tally.faces.add(rows.skyPanel.front - number(row, 'row_front_sky_vf_mean'));
-  tally.faces.add(rows.skyPanel.rear - number(row, 'row_back_sky_vf_mean'));
+  tally.shaded.add(shadedShare(geometry, tangent) - (1 - numberOf(row, 'unshaded_fraction_own')));
+  tally.lit.add(rows.litShare(tangent) - (1 - numberOf(row, 'row_shaded_fraction_own')));
+  tally.faces.add(rows.skyPanel.front - numberOf(row, 'row_front_sky_vf_mean'));
+  tally.faces.add(rows.skyPanel.rear - numberOf(row, 'row_back_sky_vf_mean'));
   const panel: PanelLight = { front: 0, rear: 0, frontReflected: 0, rearReflected: 0 };
   rows.beamPanel(tangent, panel);
-  const beam = number(row, 'dni') * Math.sin(altitude) * (panel.front + panel.rear);
-  const want = number(row, 'row_beam_both_sides_W_m2');
+  const beam = numberOf(row, 'dni') * Math.sin(altitude) * (panel.front + panel.rear);
+  const want = numberOf(row, 'row_beam_both_sides_W_m2');
   tally.beam.add((beam - want) / want);
 }
 

@@ -3,7 +3,7 @@ import { panelEndsAbove, upperSide, type RowGeometry } from './geometry.js';
 /** Rows farther than this many heights fill under 2e-3 (preview) or 2e-4 (full) of the view. */
 const REACH = { full: 60, preview: 18 } as const;
 
-/** A row seen lower than this (cosine from the vertical) is far: heights along it run evenly. */
+/** A row seen whole below this (cosine from the vertical) is far: heights along it run evenly. */
 const LOW = 0.15;
 
 /** Light through panels weaker than this is left out of the view. */
@@ -83,16 +83,18 @@ export function prepareViewSweep(
     if (perStrip === 0) return;
     const c1 = Math.sqrt(1 - from * from);
     const c2 = Math.sqrt(1 - to * to);
-    const least = Math.min(c1, c2);
-    const most = Math.max(c1, c2);
-    const perSquare = ((to - from) * scale) / Math.max(most * most - least * least, 1e-300);
-    const q1 = Math.max((most - upperCosine[k]) / perStrip, 0);
-    const q2 = Math.min((least - upperCosine[k]) / perStrip, seen);
-    let high = most;
-    for (let strip = Math.floor(q1); strip < q2; strip += 1) {
-      const low = Math.max(upperCosine[k] + perStrip * (strip + 1), least);
-      if (low < high) out[base + strip] += (high * high - low * low) * perSquare;
-      high = low;
+    const squares = Math.abs(c1 * c1 - c2 * c2);
+    if (squares === 0) return;
+    const q1 = (c1 - upperCosine[k]) / perStrip;
+    const q2 = (c2 - upperCosine[k]) / perStrip;
+    const first = Math.max(Math.min(q1, q2), 0);
+    const last = Math.min(Math.max(q1, q2), seen);
+    const perSquare = ((to - from) * scale) / squares;
+    let edge = upperCosine[k] + perStrip * first;
+    for (let strip = Math.floor(first); strip < last; strip += 1) {
+      const next = upperCosine[k] + perStrip * Math.min(strip + 1, last);
+      out[base + strip] += Math.abs(edge * edge - next * next) * perSquare;
+      edge = next;
     }
   };
 
@@ -106,7 +108,7 @@ export function prepareViewSweep(
     out: Float64Array,
   ) => {
     const length = lower[k] - upper[k];
-    if (upperCosine[k] < LOW) {
+    if (Math.max(upperCosine[k], lowerCosine[k]) < LOW && upper[k] * lower[k] > 0) {
       spread(k, from, to, scale, base, out);
       return;
     }
