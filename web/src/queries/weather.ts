@@ -17,29 +17,32 @@ export const weatherListQuery = queryOptions({
   staleTime: 60_000,
 });
 
-/** The hours of a stored year; they never change. */
+/** Hours of a stored year; they never change. */
 export const weatherYearQuery = (id: string) =>
   queryOptions({
     queryKey: [...key, 'year', id],
     queryFn: ({ signal }) => request(HourlyYearAnswer, `/api/weather/${id}/year`, { signal }),
     staleTime: Infinity,
+    gcTime: 10 * 60_000,
   });
 
 export const previewWeather = () =>
   mutationOptions({
-    mutationFn: (input: WeatherPreviewRequest) =>
-      request(WeatherPreview, '/api/weather/preview', { method: 'POST', body: input }),
+    mutationFn: (body: WeatherPreviewRequest) =>
+      request(WeatherPreview, '/api/weather/preview', { method: 'POST', body }),
   });
+
+const settle = (client: QueryClient) => client.invalidateQueries({ queryKey: [...key, 'list'] });
 
 export const createWeather = (client: QueryClient) =>
   mutationOptions({
     mutationFn: ({ input, idempotencyKey }: { input: WeatherInput; idempotencyKey: string }) =>
       request(Weather, '/api/weather', { method: 'POST', body: input, idempotencyKey }),
-    onSuccess: () => client.invalidateQueries({ queryKey: weatherListQuery.queryKey }),
+    onSuccess: () => settle(client),
   });
 
 export const removeWeather = (client: QueryClient) =>
   mutationOptions({
     mutationFn: (id: string) => call(`/api/weather/${id}`, { method: 'DELETE' }),
-    onSuccess: () => client.invalidateQueries({ queryKey: weatherListQuery.queryKey }),
+    onSuccess: () => settle(client),
   });
