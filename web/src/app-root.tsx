@@ -8,7 +8,7 @@ import { makeRoutes } from './app/router';
 
 export function mount(element: HTMLElement): void {
   const client = makeQueryClient();
-  const router = createBrowserRouter(makeRoutes(client));
+  const router = createBrowserRouter(makeRoutes());
   createRoot(element).render(
     <StrictMode>
       <AppProviders client={client}>

@@ -1,12 +1,12 @@
-import type { QueryClient } from '@tanstack/react-query';
 import type { RouteObject } from 'react-router-dom';
 import { RouteError } from './routes/route-error';
 import { NotFound } from './routes/not-found';
 import { AppLayout } from './shell/app-layout';
+import { OpenLayout } from './shell/open-layout';
 import { RouteLoading } from './shell/route-loading';
 
 /** Every page of the advisor's program; pages arrive as their own files when first opened. */
-export function makeRoutes(_client: QueryClient): RouteObject[] {
+export function makeRoutes(): RouteObject[] {
   return [
     {
       errorElement: <RouteError />,
@@ -22,6 +22,7 @@ export function makeRoutes(_client: QueryClient): RouteObject[] {
           path: '/styleguide',
           lazy: async () => ({ Component: (await import('./routes/styleguide')).Styleguide }),
         },
+        { element: <OpenLayout />, children: openPages },
         {
           element: <AppLayout />,
           children: [{ errorElement: <RouteError />, children: pages }],
@@ -78,6 +79,11 @@ const pages: RouteObject[] = [
       Component: (await import('../features/weather/weather-page')).WeatherPage,
     }),
   },
+  { path: '*', element: <NotFound /> },
+];
+
+/** Pages that anyone may read, signed in or not. */
+const openPages: RouteObject[] = [
   {
     path: 'how-we-know',
     lazy: async () => ({ Component: (await import('./routes/how-we-know')).HowWeKnow }),
@@ -86,5 +92,4 @@ const pages: RouteObject[] = [
     path: 'help',
     lazy: async () => ({ Component: (await import('./routes/help')).Help }),
   },
-  { path: '*', element: <NotFound /> },
 ];

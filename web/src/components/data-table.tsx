@@ -6,6 +6,8 @@ import classes from './data-table.module.css';
 export interface Column<Row> {
   id: string;
   head: string;
+  /** The head is spoken, not shown: its cells say what they are. */
+  headHidden?: boolean;
   cell: (row: Row) => ReactNode;
   /** What the column sorts by; without it the column does not sort. */
   sortBy?: (row: Row) => string | number;
@@ -65,7 +67,7 @@ export function DataTable<Row>({ caption, rows, columns, rowKey, initialSort }: 
                       ))}
                   </UnstyledButton>
                 ) : (
-                  column.head
+                  <HeadText column={column} />
                 )}
               </th>
             ))}
@@ -77,7 +79,7 @@ export function DataTable<Row>({ caption, rows, columns, rowKey, initialSort }: 
               {columns.map((column) => (
                 <td
                   key={column.id}
-                  data-head={column.head}
+                  data-head={column.headHidden ? '' : column.head}
                   data-numeric={column.numeric || undefined}
                 >
                   {column.cell(row)}
@@ -92,4 +94,8 @@ export function DataTable<Row>({ caption, rows, columns, rowKey, initialSort }: 
       </VisuallyHidden>
     </>
   );
+}
+
+function HeadText<Row>({ column }: { column: Column<Row> }) {
+  return column.headHidden ? <VisuallyHidden>{column.head}</VisuallyHidden> : column.head;
 }

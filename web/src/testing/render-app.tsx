@@ -46,7 +46,7 @@ export function renderApp(path: string, options: Options = {}): RenderedApp {
           ),
     ),
   );
-  const router = createMemoryRouter(makeRoutes(client), { initialEntries: [path] });
+  const router = createMemoryRouter(makeRoutes(), { initialEntries: [path] });
   const view = render(
     <AppProviders client={client} env="test">
       <RouterProvider router={router} />

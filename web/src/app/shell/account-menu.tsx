@@ -5,6 +5,7 @@ import {
   Switch,
   Text,
   UnstyledButton,
+  VisuallyHidden,
   useMantineColorScheme,
 } from '@mantine/core';
 import { IconDoorExit, IconSelector } from '@tabler/icons-react';
@@ -37,10 +38,8 @@ export function AccountMenu({ session, compact }: { session: Session; compact?: 
   return (
     <Menu position={compact ? 'bottom-end' : 'top-start'} width={264} shadow="md">
       <Menu.Target>
-        <UnstyledButton
-          className={compact ? classes.compact : classes.target}
-          aria-label={`Account of ${session.name}`}
-        >
+        <UnstyledButton className={compact ? classes.compact : classes.target}>
+          <VisuallyHidden>Account of {compact ? session.name : ''}</VisuallyHidden>
           <span className={classes.initials} aria-hidden>
             {initials(session.name)}
           </span>

@@ -69,7 +69,7 @@ export function Shell({ session, children }: { session: Session; children: React
           <AccountMenu session={session} />
         </div>
       </aside>
-      <header className={classes.topbar}>
+      <nav aria-label="Top" className={classes.topbar}>
         <Link to="/" aria-label="Furrowlight, to the desk" className={classes.home}>
           <Mark size={30} />
         </Link>
@@ -78,7 +78,7 @@ export function Shell({ session, children }: { session: Session; children: React
           <span>Find or do</span>
         </UnstyledButton>
         <AccountMenu session={session} compact />
-      </header>
+      </nav>
       <main id="main" ref={main} tabIndex={-1} className={classes.main}>
         {children}
       </main>

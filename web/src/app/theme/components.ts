@@ -40,6 +40,7 @@ export const components: MantineThemeComponents = {
     classNames: { tooltip: classes.tooltip },
   },
   Table: { classNames: { th: classes.th, td: classes.td, tr: classes.tr } },
+  Select: { defaultProps: { withScrollArea: false }, classNames: { options: classes.options } },
   Skeleton: { classNames: { root: classes.skeleton } },
   Notification: { classNames: { root: classes.notification } },
 };

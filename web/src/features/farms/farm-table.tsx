@@ -61,7 +61,8 @@ export function FarmTable({
       },
       {
         id: 'edit',
-        head: '',
+        head: 'Change',
+        headHidden: true,
         numeric: true,
         cell: (farm) => (
           <Tooltip label="Change">

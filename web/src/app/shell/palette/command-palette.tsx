@@ -19,17 +19,14 @@ interface Props {
 /** Ctrl+K: every field, scenario, farm and action by its name. */
 export function CommandPalette({ opened, onClose, memberId }: Props) {
   return (
-    <Modal
-      opened={opened}
-      onClose={onClose}
-      withCloseButton={false}
-      size="lg"
-      padding={0}
-      yOffset="12vh"
-      aria-label="Find or do"
-    >
-      <PaletteBody onClose={onClose} memberId={memberId} />
-    </Modal>
+    <Modal.Root opened={opened} onClose={onClose} size="lg" padding={0} yOffset="12vh">
+      <Modal.Overlay />
+      <Modal.Content aria-label="Find or do">
+        <Modal.Body>
+          <PaletteBody onClose={onClose} memberId={memberId} />
+        </Modal.Body>
+      </Modal.Content>
+    </Modal.Root>
   );
 }
 
