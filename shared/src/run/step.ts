@@ -30,14 +30,16 @@ function incomingOf(state: RunState, i: number): Incoming {
   const dhi = suns.dhi[i];
   const overPlane = Math.max(Math.sin(suns.planeAltitude[i]), 0);
   const overGround = Math.max(Math.sin(suns.altitude[i]), LOWEST_SINE);
-  const index =
-    input.options.sky === 'hay-davies' ? circumsolarShare(dni, SOLAR_CONSTANT * suns.distance) : 0;
+  const brightest = SOLAR_CONSTANT * suns.distance;
+  const index = input.options.sky === 'hay-davies' ? circumsolarShare(dni, brightest) : 0;
+  // What comes from around the sun and the beam together stay below the sun above the air.
+  const around = Math.min((dhi * index) / overGround, Math.max(brightest - dni, 0));
   const view = slopeSkyView(ground);
   const thrown = input.site.albedo * (dni * overGround + dhi) * (1 - view);
   return {
     beam: dni * overPlane,
-    circumsolar: (dhi * index * overPlane) / overGround,
-    even: dhi * (1 - index) * view + thrown,
+    circumsolar: around * overPlane,
+    even: (dhi - around * overGround) * view + thrown,
   };
 }
 
