@@ -106,7 +106,7 @@ function notesOf(state: RunState): string[] {
   }
   if (layout.gaps) {
     notes.push(
-      'Gaps between modules are spread evenly along the row: light spots under them are not told apart.',
+      'Light through the gaps between modules follows their pattern; values are means along the row, so single light spots are not told apart.',
     );
   }
   return notes;
