@@ -60,7 +60,10 @@ const anyInput: fc.Arbitrary<EndlessRowsInput> = fc
 
 const anySun = fc.record({ azimuth: number(0, 6.28), altitude: number(0.02, 1.5) });
 
-const RUNS = { numRuns: 60 };
+/** Fixed, so that a failing case comes back. */
+const SEED = 20_261_201;
+const RUNS = { numRuns: 40, seed: SEED };
+const FEW = { numRuns: 12, seed: SEED };
 
 interface Light {
   beam: Float64Array;
@@ -218,7 +221,7 @@ describe('endless rows', () => {
       fc.property(anyInput, (input) => {
         const solid = { ...input, gaps: undefined, discSun: false };
         const rows = prepareEndlessRows(solid);
-        const steps = 4000;
+        const steps = 40_000;
         const total = new Float64Array(9);
         const beam = new Float64Array(9);
         for (let i = 0; i < steps; i += 1) {
@@ -230,7 +233,7 @@ describe('endless rows', () => {
           expect(Math.abs(value - (rows.sky[r] - rows.skyReflected[r]))).toBeLessThan(2e-3);
         });
       }),
-      { numRuns: 20 },
+      FEW,
     );
   });
 
@@ -253,7 +256,7 @@ describe('endless rows', () => {
         // Shadows shorter on one side of the disc are longer on the other.
         expect(Math.abs(mean(a) - mean(b))).toBeLessThan(0.01);
       }),
-      { numRuns: 20 },
+      FEW,
     );
   });
 });

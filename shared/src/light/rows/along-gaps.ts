@@ -63,7 +63,8 @@ function fillChain(filled: number, transmittance: number, shift: number, out: Fl
   const two = 1 - 2 * filled * kept + kept * kept * bothFilled(filled, shift);
   out[0] = 1;
   out[1] = one;
-  const ratio = one > 0 ? two / one : 0;
+  // Where the gaps of one row lie wholly before modules of the next, rounding may fall below 0.
+  const ratio = one > 0 ? Math.max(two, 0) / one : 0;
   for (let n = 2; n < out.length; n += 1) out[n] = out[n - 1] * ratio;
 }
 
