@@ -233,7 +233,6 @@ describe('the database', () => {
   it('shows readers committed rows only, and the writer its own', async () => {
     const database = await open();
     let seenInside = -1;
-    let seenOutside = -1;
     const outside = () => database.read.count(CooperativeEntity);
     await database.write(async (manager) => {
       await manager.insert(CooperativeEntity, row('c-1'));
@@ -246,7 +245,7 @@ describe('the database', () => {
       await pause();
     });
     await pause();
-    seenOutside = await outside();
+    const seenOutside = await outside();
     await writing;
     expect([seenInside, seenOutside, await outside()]).toEqual([1, 1, 2]);
     await database.onApplicationShutdown();

@@ -1,3 +1,5 @@
+import path from 'node:path';
+import Sqlite from 'better-sqlite3';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { startServer, type TestServer } from './support/server.js';
 import type { Visitor } from './support/visitor.js';
@@ -87,5 +89,15 @@ describe('the audit log', () => {
     await admin.patch(`/api/farms/${north.neighbour.farm.id}`, 99, { place: 'X' });
     await admin.post('/api/farms', { name: 'Hof', holder: 'H' });
     expect((await admin.get('/api/audit')).body.items[0].seq).toBe(before);
+  });
+
+  it('notices an entry that was changed behind its back', async () => {
+    const file = path.join(server.dataDir, 'furrowlight.sqlite');
+    const [entry] = (await admin.get('/api/audit?size=1')).body.items;
+    const db = new Sqlite(file);
+    db.exec('DROP TRIGGER audit_log_stands');
+    db.prepare('UPDATE audit_log SET actor_name = ? WHERE seq = ?').run('Nobody', entry.seq);
+    db.close();
+    expect((await admin.get('/api/audit')).body.brokenAt).toBe(entry.seq);
   });
 });
