@@ -1,8 +1,7 @@
 import type { RouteObject } from 'react-router-dom';
 import { RouteError } from './routes/route-error';
 import { NotFound } from './routes/not-found';
-import { AppLayout } from './shell/app-layout';
-import { OpenLayout } from './shell/open-layout';
+import { AppLayout, type PageHandle } from './shell/app-layout';
 import { RouteLoading } from './shell/route-loading';
 
 /** Every page of the advisor's program; pages arrive as their own files when first opened. */
@@ -22,7 +21,6 @@ export function makeRoutes(): RouteObject[] {
           path: '/styleguide',
           lazy: async () => ({ Component: (await import('./routes/styleguide')).Styleguide }),
         },
-        { element: <OpenLayout />, children: openPages },
         {
           element: <AppLayout />,
           children: [{ errorElement: <RouteError />, children: pages }],
@@ -31,6 +29,9 @@ export function makeRoutes(): RouteObject[] {
     },
   ];
 }
+
+/** Marks a page that anyone may read, signed in or not. */
+const OPEN: PageHandle = { open: true };
 
 const pages: RouteObject[] = [
   {
@@ -79,17 +80,15 @@ const pages: RouteObject[] = [
       Component: (await import('../features/weather/weather-page')).WeatherPage,
     }),
   },
-  { path: '*', element: <NotFound /> },
-];
-
-/** Pages that anyone may read, signed in or not. */
-const openPages: RouteObject[] = [
   {
     path: 'how-we-know',
+    handle: OPEN,
     lazy: async () => ({ Component: (await import('./routes/how-we-know')).HowWeKnow }),
   },
   {
     path: 'help',
+    handle: OPEN,
     lazy: async () => ({ Component: (await import('./routes/help')).Help }),
   },
+  { path: '*', element: <NotFound /> },
 ];

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { PageHead } from '../../components/page-head';
 import { Section } from '../../components/section';
+import { ValidationTable } from '../../features/knowledge/validation-table';
 import { configQuery } from '../../queries/config';
 import classes from './prose.module.css';
 
@@ -8,7 +9,7 @@ import classes from './prose.module.css';
 const CHAIN: { title: string; text: string; source: string }[] = [
   {
     title: 'Where the sun stands',
-    text: 'Its azimuth and height at the field, at steps of thirty minutes or finer, refraction included. Times are the local standard time of the place; summer time moves no shadow.',
+    text: 'Its azimuth and height at the field, every ten minutes, refraction included. Times are the local standard time of the place; summer time moves no shadow.',
     source: 'Solar position after Meeus; sun-earth distance after Spencer 1971',
   },
   {
@@ -55,6 +56,7 @@ export function HowWeKnow() {
           </li>
         ))}
       </ol>
+      <ValidationTable />
       <Section title="Modelled and measured">
         <p>
           A number marked <strong>modelled</strong> was worked out from weather and layout. A number
