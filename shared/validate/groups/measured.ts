@@ -49,9 +49,7 @@ function surfradDay(folder: string, site: Site): Quantity[] {
     const c = line.trim().split(/\s+/).map(Number);
     if (c.length < 32) continue;
     // Global and its flag, direct, PAR and its flag; flag 0 is good.
-    const [global, globalFlag, direct, par, parFlag] = [
-      8, 9, 12, 13, 16, 17, 30, 31,
-    ].map((i) => c[i]);
+    const [global, globalFlag, direct, par, parFlag] = [8, 9, 12, 30, 31].map((i) => c[i]);
     const instant = Date.UTC(c[0], c[2] - 1, c[3], c[4], c[5]);
     const { altitude } = sunPosition(instant, site.latitude, site.longitude);
     if (altitude < (LOW_SUN_DEG * Math.PI) / 180 || globalFlag !== 0 || parFlag !== 0) continue;
