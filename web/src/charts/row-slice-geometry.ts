@@ -1,5 +1,4 @@
 import type { Layout } from '@furrowlight/shared/contract/layout';
-import { midHeightM } from '@furrowlight/shared/run/layout-geometry';
 import type { RowSlice } from '@furrowlight/shared/run/slice';
 
 /** The drawing's own units: it is scaled to its place by the browser. */
@@ -25,15 +24,15 @@ export interface SliceFrame {
 export function frameOf(layout: Layout): SliceFrame {
   const worst =
     layout.kind === 'single-axis-tracker' ? (layout.tracker?.maxAngleDeg ?? 0) : layout.tiltDeg;
-  const half = (layout.collectorWidthM / 2) * Math.sin((worst * Math.PI) / 180);
-  const top = Math.max(midHeightM(layout) + half, TRACTOR_M) + SKY_M;
+  const rise = layout.collectorWidthM * Math.sin((worst * Math.PI) / 180);
+  const top = Math.max(layout.clearHeightM + rise, TRACTOR_M) + SKY_M;
   const { pitchM } = layout;
   const bays = pitchM > WIDE_PITCH_M ? 1.2 : 2;
   const perMetre = Math.min(SLICE.width / (bays * pitchM), (SLICE.ground - 16) / top);
   const width = SLICE.width / perMetre;
   const leftM = (pitchM - width) / 2;
   const rightM = leftM + width;
-  const reach = layout.collectorWidthM;
+  const reach = Math.max(layout.collectorWidthM, pitchM / 2);
   const first = Math.ceil((leftM - reach) / pitchM);
   const last = Math.floor((rightM + reach) / pitchM);
   const rows = Array.from({ length: last - first + 1 }, (_, i) => (first + i) * pitchM);
@@ -67,6 +66,18 @@ export function sunSpot(slice: RowSlice): { x: number; y: number } | null {
     up > 1e-6 ? (SLICE.ground - 34) / up : Infinity,
   );
   return { x: SLICE.width / 2 + Math.sin(angle) * reach, y: SLICE.ground - up * reach };
+}
+
+/** Stretches of cropped ground between the uncropped strips, in drawing units. */
+export function croppedStretches(
+  frame: SliceFrame,
+  layout: Layout,
+): { x: number; width: number }[] {
+  const half = layout.stripWidthM / 2;
+  return [frame.rows[0] - layout.pitchM, ...frame.rows].map((row) => ({
+    x: xOf(frame, row + half),
+    width: (layout.pitchM - layout.stripWidthM) * frame.perMetre,
+  }));
 }
 
 /** A strip of ground in sight, with its share of open field. */

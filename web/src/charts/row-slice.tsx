@@ -7,6 +7,7 @@ import { compassPoint, formatNumber, percent, withUnit } from '../lib/format';
 import { Person, Tractor } from './row-slice-figures';
 import {
   SLICE,
+  croppedStretches,
   curvePath,
   curveY,
   frameOf,
@@ -71,10 +72,6 @@ export function RowSlicePicture({ layout, slice, canopyHeightM }: Props) {
   const sun = sunSpot(slice);
   const middle = layout.pitchM / 2;
   const crop = Math.max(canopyHeightM * frame.perMetre, 3);
-  const cropped = (u: number) => {
-    const toRow = Math.abs(u - Math.round(u / layout.pitchM) * layout.pitchM);
-    return toRow >= layout.stripWidthM / 2;
-  };
   const tractor = passOf(layout, TRACTOR);
   return (
     <svg
@@ -89,18 +86,16 @@ export function RowSlicePicture({ layout, slice, canopyHeightM }: Props) {
         className={sun ? classes.day : classes.night}
       />
       {sun && <circle cx={sun.x} cy={sun.y} r="17" className={classes.sun} />}
-      {strips.map(({ x, width, u }) =>
-        cropped(u) ? (
-          <rect
-            key={x}
-            x={x}
-            y={SLICE.ground - crop}
-            width={width + 0.4}
-            height={crop}
-            className={classes.crop}
-          />
-        ) : null,
-      )}
+      {croppedStretches(frame, layout).map(({ x, width }) => (
+        <rect
+          key={x}
+          x={x}
+          y={SLICE.ground - crop}
+          width={width}
+          height={crop}
+          className={classes.crop}
+        />
+      ))}
       <Rows layout={layout} slice={slice} frame={frame} canopyHeightM={canopyHeightM} />
       <Tractor
         x={xOf(frame, middle)}

@@ -24,9 +24,8 @@ export function LiveFigures({ layout, laid }: { layout: Layout; laid: LaidRows |
           <Figure
             label="Rows"
             value={formatNumber(f.rowCount)}
-            note={`${formatNumber(f.rowLengthM)} m in all`}
+            note={`${formatNumber(f.rowLengthM)} m, ${formatNumber(f.posts)} posts`}
           />
-          <Figure label="Posts" value={formatNumber(f.posts)} />
           <Figure
             label="Land lost"
             value={formatNumber(f.landLostShare * 100, 1)}
