@@ -59,7 +59,9 @@ export const removeField = (client: QueryClient) =>
     mutationFn: ({ id, version }: { id: string; version: number }) =>
       call(`/api/fields/${id}`, { method: 'DELETE', version }),
     onSuccess: (_response, { id }) => {
-      client.removeQueries({ queryKey: fieldQuery(id).queryKey });
+      // What belonged to the field is gone with it and must not be asked for again.
+      const gone = [fieldQuery(id).queryKey, ['seasons', id], ['scenarios', 'list', id]];
+      gone.forEach((queryKey) => client.removeQueries({ queryKey }));
       return invalidate(client);
     },
   });

@@ -15,6 +15,8 @@ import type { ReadPolygon } from './import/parse-geojson';
 interface Props {
   className: string;
   fields: readonly Field[];
+  /** The farm the list is narrowed to. */
+  farmId: string | null;
   selectedId: string | null;
   onSelect: (id: string) => void;
   mode: AddMode | null;
@@ -71,6 +73,7 @@ export function FieldsMap(props: Props) {
             }}
           />
         ))}
+      {!mode && props.farmId && !props.selectedId && <FitTo box={home} />}
       {mode === 'import' && <FitTo box={incoming} />}
     </BaseMap>
   );

@@ -122,6 +122,7 @@ export function FieldsPage() {
             <FieldsMap
               className={classes.map}
               fields={mode ? all : shown}
+              farmId={farmId}
               selectedId={selectedId}
               onSelect={(id) => change({ field: id })}
               mode={mode}

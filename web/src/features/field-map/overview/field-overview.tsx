@@ -2,7 +2,7 @@ import type { Field } from '@furrowlight/shared/contract/fields';
 import { Button, Skeleton } from '@mantine/core';
 import { IconPolygon } from '@tabler/icons-react';
 import { useQuery } from '@tanstack/react-query';
-import { lazy, Suspense, useEffect, type ReactNode } from 'react';
+import { lazy, Suspense, useEffect, useRef, type ReactNode } from 'react';
 import { useLocation, useSearchParams } from 'react-router-dom';
 import { Section } from '../../../components/section';
 import { fieldListQuery } from '../../../queries/fields';
@@ -43,12 +43,19 @@ export function FieldOverview({ field, reviews }: Props) {
   });
   const editor = useBoundaryEditor(`boundary:${field.id}`, shapeOf(field.boundary));
   const drawing = useOccluderDrawing();
+  const top = useRef<HTMLDivElement>(null);
   const editing = search.get('edit') === 'boundary';
+  const tapping = drawing.line !== null;
   const ready = seasons.isSuccess && scenarios.isSuccess;
 
   useEffect(() => {
     if (hash && ready) document.getElementById(hash.slice(1))?.scrollIntoView();
   }, [hash, ready]);
+
+  // The tools work on the map; it must be in sight when they come up.
+  useEffect(() => {
+    if (editing || tapping) top.current?.scrollIntoView({ block: 'start' });
+  }, [editing, tapping]);
 
   const open = (name: string, value: string | null) =>
     setSearch((before) => {
@@ -60,7 +67,7 @@ export function FieldOverview({ field, reviews }: Props) {
 
   return (
     <>
-      <div className={classes.top}>
+      <div className={classes.top} ref={top}>
         <div>
           <Suspense fallback={<Skeleton className={classes.map} />}>
             <OverviewMap
