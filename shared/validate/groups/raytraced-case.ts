@@ -43,6 +43,8 @@ export interface RaytracedCase {
     module_length?: number;
     gap_length?: number;
     checkerboard?: boolean;
+    n_rows?: number | string;
+    row_length?: number | string;
   };
   receivers: { s: number[]; along: number | number[] };
   sky: Record<'black' | 'refl' | 'refl_alb0' | 'trans', SkyReference>;
