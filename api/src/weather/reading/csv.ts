@@ -1,5 +1,6 @@
 import type { WeatherMapping, WeatherQuantity } from '@furrowlight/shared/contract/weather';
-import { parse } from 'csv-parse/sync';
+import { CsvError, parse } from 'csv-parse/sync';
+import { invalid } from '../../common/domain-error.js';
 import { parseStamp } from './stamp.js';
 import { numberOf, type RawHour } from './raw-hour.js';
 import { toOwnUnit, unitInHeader } from './units.js';
@@ -8,15 +9,31 @@ const DELIMITERS = [';', '\t', ',', '|'] as const;
 /** Lines looked at to guess the layout. */
 const LOOK = 60;
 
-export function cellsOf(text: string, delimiter: string): string[][] {
-  return parse(text, {
-    delimiter,
-    relax_column_count: true,
-    relax_quotes: true,
-    skip_empty_lines: false,
-    trim: true,
-    bom: true,
+/** Fewest and most columns a table of hours has. */
+const COLUMNS = { least: 2, most: 120 };
+
+const noTable = () =>
+  invalid({
+    path: 'content',
+    message:
+      'This does not look like a table of hours. Give an EPW file, or a CSV with a time column and one line an hour.',
   });
+
+/** @throws DomainError invalid-input naming the content, where the text is no table at all */
+export function cellsOf(text: string, delimiter: string): string[][] {
+  try {
+    return parse(text, {
+      delimiter,
+      relax_column_count: true,
+      relax_quotes: true,
+      skip_empty_lines: false,
+      trim: true,
+      bom: true,
+    });
+  } catch (error) {
+    if (error instanceof CsvError) throw noTable();
+    throw error;
+  }
 }
 
 const isNumeric = (cell: string) => /^[-+]?\d+([.,]\d+)?([eE][-+]?\d+)?$/.test(cell);
@@ -69,12 +86,14 @@ function guessHeaderLines(rows: string[][]): number {
  * Best guess of how a general hourly CSV is to be read. The caller shows it for correction.
  *
  * @param utcOffsetHours standard time of the place, hours east of UTC
+ * @throws DomainError invalid-input naming the content, where there are no columns to guess
  */
 export function guessMapping(lines: string[], utcOffsetHours: number): WeatherMapping {
   const delimiter = guessDelimiter(lines.slice(0, LOOK));
   const rows = cellsOf(lines.slice(0, LOOK).join('\n'), delimiter);
   const headerLines = guessHeaderLines(rows);
   const width = rows[headerLines]?.length ?? 0;
+  if (width < COLUMNS.least || width > COLUMNS.most) throw noTable();
   const names = headersOf(rows, headerLines, width);
   const sample = rows[headerLines] ?? [];
   const decimal =
