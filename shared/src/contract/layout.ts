@@ -99,6 +99,14 @@ export const Layout = z
         message: 'Tracker settings are missing.',
       });
     }
+    const { transmittance, frontReflectance, rearReflectance } = layout.module;
+    if (transmittance + Math.max(frontReflectance, rearReflectance) > 1) {
+      context.addIssue({
+        code: 'custom',
+        path: ['module', 'transmittance'],
+        message: 'The module would pass on and throw back more light than falls on it.',
+      });
+    }
     if (layout.stripWidthM >= layout.pitchM) {
       context.addIssue({
         code: 'custom',

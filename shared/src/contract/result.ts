@@ -59,6 +59,8 @@ export const Energy = z.object({
   clippingLossPercent: z.number(),
   /** Against the same tracker without its crop-first programme, %; null where it has none. */
   cropFirstCostPercent: z.number().nullable(),
+  /** PAR gained at the lowest canopy on the programme's days, % of that tracker's; null without one. */
+  cropFirstGainPercent: z.number().nullable().default(null),
 });
 export type Energy = z.infer<typeof Energy>;
 

@@ -1,5 +1,5 @@
 import type { Energy, Plane, RunResult } from '../contract/result.js';
-import { monthSpan } from '../crops/windows.js';
+import { dayOfMonthDay, isWithin, monthSpan } from '../crops/windows.js';
 import {
   dailyStatistics,
   periodBudget,
@@ -72,6 +72,24 @@ function planeResult({ heightM, sums }: PlaneState): Plane {
   };
 }
 
+/** PAR gained by a crop-first programme on its days, % of the plain tracker's. */
+function cropFirstGain(state: RunState): number | null {
+  const windows = state.input.layout.tracker?.cropFirst ?? [];
+  if (!state.plainTracker) return null;
+  const { sums } = state.planes[0];
+  let served = 0;
+  let plain = 0;
+  for (let day = 0; day < state.days; day += 1) {
+    const inWindow = windows.some(({ from, to }) =>
+      isWithin(Math.min(day, 364), dayOfMonthDay(from), dayOfMonthDay(to)),
+    );
+    if (!inWindow) continue;
+    served += periodBudget(sums, '', day, 1).meanDli;
+    plain += periodBudget(state.plainTracker.sums, '', day, 1).meanDli;
+  }
+  return plain > 0 ? 100 * (served / plain - 1) : 0;
+}
+
 function energyResult(state: RunState): Energy {
   const year = noEnergy();
   for (const month of state.energyByMonth) {
@@ -89,6 +107,7 @@ function energyResult(state: RunState): Energy {
     incidenceLossPercent: percent(year.incidence),
     clippingLossPercent: percent(year.clipping),
     cropFirstCostPercent: plain ? 100 * (1 - year.ac / plain) : null,
+    cropFirstGainPercent: cropFirstGain(state),
   };
 }
 

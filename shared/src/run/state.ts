@@ -51,7 +51,7 @@ export interface RunState {
   months: SplitSums[];
   energyByMonth: EnergySums[];
   /** The same tracker without its crop-first programme; null where it has none. */
-  plainTracker: { light: RowLight; energy: EnergySums } | null;
+  plainTracker: { light: RowLight; energy: EnergySums; sums: LightSums } | null;
   /** Open-field broadband light by day on the field's plane, J m-2. */
   openEnergy: Float64Array;
 }
@@ -145,7 +145,11 @@ export function prepareRun(
     months: Array.from({ length: 12 }, noSplit),
     energyByMonth: Array.from({ length: 12 }, noEnergy),
     plainTracker: cropFirst
-      ? { light: lightOf(input, 0, new Float64Array(1), quality), energy: noEnergy() }
+      ? {
+          light: lightOf(input, heightsM[0], positions, quality),
+          energy: noEnergy(),
+          sums: emptyLightSums(days, options.positions),
+        }
       : null,
     openEnergy: new Float64Array(days),
   };

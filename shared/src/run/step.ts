@@ -198,5 +198,6 @@ export function countSun(state: RunState, day: number, i: number): void {
     const meter = meterRotation(steering, 'backtracking', azimuth, altitude);
     state.plainTracker.light.set(azimuth, altitude, meter);
     addPower(state, state.plainTracker.light, incoming, i, state.plainTracker.energy);
+    addLight(state, state.plainTracker.sums, state.plainTracker.light, day, incoming);
   }
 }

@@ -202,6 +202,13 @@ describe('a crop-first programme', () => {
     expect(serving.energy.cropFirstCostPercent).toBeCloseTo(cost, 6);
     expect(cost).toBeGreaterThan(5);
     expect(plain.energy.cropFirstCostPercent).toBeNull();
+    const sumOf = (result: RunResult) =>
+      result.planes[0].months
+        .slice(4, 6)
+        .reduce((sum, { meanDli, days }) => sum + meanDli * days, 0);
+    const gain = 100 * (sumOf(serving) / sumOf(plain) - 1);
+    expect(serving.energy.cropFirstGainPercent).toBeCloseTo(gain, 6);
+    expect(plain.energy.cropFirstGainPercent).toBeNull();
   });
 
   it('may run over New Year', () => {

@@ -91,6 +91,14 @@ export function EnergyFigures({
           note="against the same tracker serving the meter"
         />
       )}
+      {energy.cropFirstGainPercent != null && (
+        <Figure
+          label="Light won for the crop"
+          value={formatNumber(energy.cropFirstGainPercent, 1)}
+          unit="%"
+          note="on the days of the programme"
+        />
+      )}
     </FigureRow>
   );
 }
