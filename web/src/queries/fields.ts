@@ -58,10 +58,11 @@ export const removeField = (client: QueryClient) =>
   mutationOptions({
     mutationFn: ({ id, version }: { id: string; version: number }) =>
       call(`/api/fields/${id}`, { method: 'DELETE', version }),
-    onSuccess: (_response, { id }) => {
-      // What belonged to the field is gone with it and must not be asked for again.
-      const gone = [fieldQuery(id).queryKey, ['seasons', id], ['scenarios', 'list', id]];
-      gone.forEach((queryKey) => client.removeQueries({ queryKey }));
-      return invalidate(client);
-    },
+    // Only lists: the page of the removed field is still open and must not ask for it again.
+    onSuccess: () =>
+      Promise.all(
+        [fieldListQuery().queryKey.slice(0, 2), ['farms'], ['desk']].map((queryKey) =>
+          client.invalidateQueries({ queryKey }),
+        ),
+      ),
   });
