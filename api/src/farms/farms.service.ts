@@ -67,12 +67,9 @@ export class FarmsService {
     return new Map(rows.map((row) => [row.id, facts(row)]));
   }
 
-  /** Name of a standing farm for a visitor whose link has been checked already. */
-  async nameForLink(cooperativeId: string, id: string): Promise<string> {
-    const where = { id, cooperativeId, deletedAt: IsNull() };
-    const row = await this.database.read.findOneBy(FarmEntity, where);
-    if (!row) throw notFound('farm');
-    return row.name;
+  /** Is the farm outside the bin? */
+  stands(cooperativeId: string, id: string): Promise<boolean> {
+    return this.database.read.existsBy(FarmEntity, { id, cooperativeId, deletedAt: IsNull() });
   }
 
   /** `farmerMemberId` links the holder's own account: that member sees this farm. */

@@ -1,4 +1,4 @@
-import type { LinkPrincipal, MemberPrincipal } from '@furrowlight/shared/access/may';
+import type { MemberPrincipal } from '@furrowlight/shared/access/may';
 import type { Field, FieldInput, FieldPatch, LonLat } from '@furrowlight/shared/contract/fields';
 import { Injectable } from '@nestjs/common';
 import { In, IsNull, LessThan, Not, type EntityManager } from 'typeorm';
@@ -71,14 +71,11 @@ export class FieldsService {
     return (await this.find(this.database.read, principal, id, false)) !== null;
   }
 
-  /** The one field of a review link. @throws DomainError not-found once it is removed */
-  async getForLink(visitor: LinkPrincipal): Promise<Field> {
-    const { fieldId: id, cooperativeId } = visitor;
+  /** Is the field, with its farm, outside the bin? For links, whose visitors are no members. */
+  async stands(cooperativeId: string, id: string): Promise<boolean> {
     const where = { id, cooperativeId, deletedAt: IsNull() };
     const row = await this.database.read.findOneBy(FieldEntity, where);
-    if (!row) throw notFound('field');
-    const farmName = await this.farms.nameForLink(cooperativeId, row.farmId);
-    return this.describe(this.database.read, row, farmName);
+    return row !== null && (await this.farms.stands(cooperativeId, row.farmId));
   }
 
   /** @throws DomainError not-found for the farm, invalid-input for the ground */

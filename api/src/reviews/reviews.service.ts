@@ -157,6 +157,7 @@ export class ReviewsService implements OnModuleInit {
     });
     const row = visit && (await this.database.read.findOneBy(ReviewEntity, { id: visit.reviewId }));
     if (!row || this.stateOf(row) !== 'open') return null;
+    if (!(await this.fields.stands(row.cooperativeId, row.fieldId))) return null;
     return {
       kind: 'review-link',
       reviewId: row.id,

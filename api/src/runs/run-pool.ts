@@ -14,6 +14,8 @@ const THREADS = 1;
 export interface PoolJob {
   done: Promise<RunResult>;
   stop(): void;
+  /** Has someone asked it to stop? The error a thread throws loses its name on the way here. */
+  stopAsked(): boolean;
 }
 
 /** Beside this file when built; in the build folder when tests run from source. */
@@ -44,7 +46,11 @@ export class RunPool implements OnApplicationShutdown {
         this.flags.delete(flag);
       },
     );
-    return { done, stop: () => void Atomics.store(flag, 0, 1) };
+    return {
+      done,
+      stop: () => void Atomics.store(flag, 0, 1),
+      stopAsked: () => Atomics.load(flag, 0) === 1,
+    };
   }
 
   /** Ask every run to stop; their rows stay `running` and are taken up at the next start. */

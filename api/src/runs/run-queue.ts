@@ -27,6 +27,8 @@ const PROGRESS_WRITE_MS = 1000;
 export class RunQueue implements OnApplicationBootstrap, OnApplicationShutdown {
   private working: Promise<void> | null = null;
   private current: { runId: string; job: PoolJob } | null = null;
+  /** The run being taken up, and whether it was told to stop before its thread had it. */
+  private taking: { runId: string; stop: boolean } | null = null;
   private progress = new Map<string, number>();
   private closing = false;
 
@@ -69,6 +71,7 @@ export class RunQueue implements OnApplicationBootstrap, OnApplicationShutdown {
   /** Stop a run in work; a waiting one only needs its row changed. */
   stop(runId: string): void {
     if (this.current?.runId === runId) this.current.job.stop();
+    else if (this.taking?.runId === runId) this.taking.stop = true;
   }
 
   private async drain(): Promise<void> {
@@ -91,6 +94,8 @@ export class RunQueue implements OnApplicationBootstrap, OnApplicationShutdown {
       );
       return;
     }
+    const taking = { runId: run.id, stop: false };
+    this.taking = taking;
     const began = await this.database.write((manager) =>
       manager.update(
         RunEntity,
@@ -116,12 +121,14 @@ export class RunQueue implements OnApplicationBootstrap, OnApplicationShutdown {
           .catch(() => undefined);
       });
       this.current = { runId: run.id, job };
+      if (taking.stop) job.stop();
       const result = await job.done;
       await this.keep(run, result, performance.now() - start);
     } catch (error) {
       await this.fail(run, error);
     } finally {
       this.current = null;
+      this.taking = null;
       this.progress.delete(run.id);
     }
   }
@@ -150,8 +157,7 @@ export class RunQueue implements OnApplicationBootstrap, OnApplicationShutdown {
   private async fail(run: RunEntity, error: unknown): Promise<void> {
     // A stop at shutdown is no failure: the row waits for the next start.
     if (this.closing) return;
-    const name = error instanceof Error ? error.name : '';
-    if (name === 'RunStopped') {
+    if (this.current?.job.stopAsked()) {
       await this.finish(run, 'cancelled', null);
       return;
     }
