@@ -1,6 +1,7 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { benchWeather, OVERHEAD, SITE, TRACKER, yearInput } from '../../bench/inputs.js';
-import type { Layout } from '../../src/contract/layout.js';
+import { Layout } from '../../src/contract/layout.js';
 import { preparePreview, previewLayout } from '../../src/run/preview.js';
 import { runScenario } from '../../src/run/run-scenario.js';
 import { sliceAt } from '../../src/run/slice.js';
@@ -36,6 +37,54 @@ describe('a preview', () => {
   it('refuses a season without days by name', () => {
     expect(() => previewLayout(PLACE, OVERHEAD, 1, { firstDay: 3, days: 0 })).toThrow(
       /season.days/,
+    );
+  });
+});
+
+const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+
+/** Layouts over the whole range of the contract; what it refuses is left out. */
+const anyLayout: fc.Arbitrary<Layout> = fc
+  .record({
+    base: fc.constantFrom(OVERHEAD, VERTICAL, TRACKER),
+    pitchM: between(1, 60),
+    collectorWidthM: between(0.3, 12),
+    tiltDeg: between(0, 90),
+    azimuthDeg: between(0, 360),
+    clearHeightM: between(0, 12),
+    structureShade: between(0, 0.2),
+    dcAcRatio: between(0.5, 3),
+    gaps: fc.option(fc.record({ gapM: between(0.05, 20), checkerboard: fc.boolean() })),
+    transmittance: between(0, 0.9),
+    reflectance: between(0, 0.5),
+    maxAngleDeg: between(10, 90),
+  })
+  .map(({ base, transmittance, reflectance, maxAngleDeg, ...rest }) => ({
+    ...base,
+    ...rest,
+    module: { ...base.module, transmittance, frontReflectance: reflectance },
+    tracker: base.tracker && { ...base.tracker, maxAngleDeg },
+  }))
+  .filter((layout) => Layout.safeParse(layout).success);
+
+describe('any layout that the contract lets through', () => {
+  it('gives finite numbers and shares between 0 and little over 1, canopy above panels included', () => {
+    fc.assert(
+      fc.property(anyLayout, between(0, 8), (layout, canopyHeightM) => {
+        const preview = previewLayout(PLACE, layout, canopyHeightM, SEASON, 10);
+        const { share, kwhPerKwp, evenness } = preview;
+        expect([...share, kwhPerKwp, evenness, preview.kwhPerM2Land].every(Number.isFinite)).toBe(
+          true,
+        );
+        expect(Math.min(...share)).toBeGreaterThanOrEqual(0);
+        expect(Math.max(...share)).toBeLessThan(1.3);
+        expect(kwhPerKwp).toBeGreaterThan(0);
+        const moment = { year: 2025, day: 100, hour: 9, utcOffsetHours: 1 };
+        expect(sliceAt(PLACE, layout, canopyHeightM, moment, 10).ppfd.every(Number.isFinite)).toBe(
+          true,
+        );
+      }),
+      { numRuns: 60, seed: 13 },
     );
   });
 });

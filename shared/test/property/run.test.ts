@@ -242,6 +242,15 @@ describe('a caller', () => {
       () => quick(OVERHEAD, { weather: { ...WEATHER, ghi: WEATHER.ghi.slice(24) } }),
     ],
     [
+      'a module that gives back more light than it gets',
+      /more light than falls on it/,
+      () =>
+        quick({
+          ...OVERHEAD,
+          module: { ...OVERHEAD.module, transmittance: 0.9, rearReflectance: 0.2 },
+        }),
+    ],
+    [
       'a clock that is half a day off',
       /weather.ghi.*|check the clock/,
       () => quick(OVERHEAD, { weather: { ...WEATHER, utcOffsetHours: -8 } }),

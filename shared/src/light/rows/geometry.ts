@@ -103,6 +103,9 @@ export interface PanelEnds {
 /** +1 where the upper edge is on the -u side (tilt above 0), else -1. */
 export const upperSide = (geometry: RowGeometry): 1 | -1 => (geometry.tilt < 0 ? -1 : 1);
 
+/** A panel that rises less than this over the receivers lies on them and shades nothing, m. */
+const TOUCHING = 1e-5;
+
 /** Ends of the panel of row 0 above height `z0` (upper end first). */
 export function panelEndsAbove(geometry: RowGeometry, z0: number): PanelEnds {
   const half = geometry.width / 2;
@@ -112,7 +115,7 @@ export function panelEndsAbove(geometry: RowGeometry, z0: number): PanelEnds {
   const z1 = geometry.midHeight + half * s;
   let u2 = half * c;
   let z2 = geometry.midHeight - half * s;
-  if (z1 <= z0) return { u1, z1, u2, z2, above: false };
+  if (z1 <= z0 + TOUCHING) return { u1, z1, u2, z2, above: false };
   if (z2 < z0) {
     const share = (z1 - z0) / (z1 - z2);
     u2 = u1 + (u2 - u1) * share;
