@@ -69,7 +69,8 @@ function drawTile(z, x, y) {
       const height = noise(wx / 1.7, wy / 1.7, 1) * 0.65 + noise(wx * 1.9, wy * 1.9, 2) * 0.35;
       const wood = noise(wx * 1.3 + 40, wy * 1.3, 3) > 0.72;
       const step = (height * 22) % 1;
-      const line = step < 0.05 * Math.max(1, unit * 160);
+      // Zoomed out, contours would crowd into noise.
+      const line = z >= 13 && step < 0.05 * Math.max(1, unit * 160);
       const base = wood ? [206, 219, 196] : [240 - height * 14, 235 - height * 10, 218 - height * 22];
       const shade = line ? 0.94 : 1;
       for (let band = 0; band < 3; band += 1) raw[start + column * 3 + band] = base[band] * shade;
