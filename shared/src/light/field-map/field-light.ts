@@ -1,4 +1,5 @@
 import { requireWithin } from '../../errors.js';
+import { stripAt } from '../rows/elements.js';
 import {
   planeFactor,
   requireRowOptics,
@@ -6,6 +7,7 @@ import {
   type RowOptics,
 } from '../rows/geometry.js';
 import {
+  meanThrough,
   panelsCrossed,
   prepareFiniteRows,
   sunBearing,
@@ -14,7 +16,7 @@ import {
   type RowStretch,
 } from './finite-rows.js';
 import { cutPatches, eachPatch, patchAt, type Patches } from './patches.js';
-import { alongShare, sweepView } from './profile-sweep.js';
+import { alongShare, sweepView, type Sighting } from './profile-sweep.js';
 import { followFans, type Fans } from './ray-fan.js';
 import { prepareGroundSky } from './ground-sky.js';
 
@@ -46,14 +48,45 @@ export interface FieldLight {
 /** Rounds of light between patches; each takes off a factor of the reflectance. */
 const ROUNDS = 4;
 
-/** Points per patch side from which its beam is judged. */
-const BEAM_POINTS = 3;
+/** Lines along a patch on which its beam is judged. */
+const BEAM_LINES = 6;
 
 /** What every receiver sees of the patches: entries of receiver r from start[r] to start[r + 1]. */
 interface ReceiverViews {
   start: Int32Array;
   patch: number[];
   share: number[];
+}
+
+/** Share one sighting between along directions `from` and `to` out to the patches seen. */
+function spreadOverPatches(
+  rows: FiniteRows,
+  patches: Patches,
+  { stretch, front, slantFrom, slantTo, perAlong }: Sighting,
+  v: number,
+  from: number,
+  to: number,
+  give: (patch: number, share: number) => void,
+): void {
+  const { strips } = patches;
+  const { from: begin, to: end } = rows.stretches[stretch];
+  const length = (end - begin) / patches.blocks[stretch];
+  const first = Math.floor((v + from * perAlong - begin) / length + 1e-9);
+  const last = Math.ceil((v + to * perAlong - begin) / length - 1e-9) - 1;
+  const top = slantFrom * strips;
+  const bottom = Math.max(slantTo * strips, top + 1e-9);
+  const topStrip = stripAt(slantFrom, strips);
+  let below = alongShare(from);
+  for (let block = first; block <= last; block += 1) {
+    const edge = block === last ? to : (begin + (block + 1) * length - v) / perAlong;
+    const above = alongShare(edge);
+    for (let strip = topStrip; strip < strips && strip < bottom; strip += 1) {
+      const part = Math.min(strip + 1, bottom) - Math.max(strip, top);
+      const share = (part / (bottom - top)) * (above - below);
+      if (part > 0) give(patchAt(patches, stretch, front, block, strip), share);
+    }
+    below = above;
+  }
 }
 
 /** Sweep all receivers: their straight sky and their views of the patches. */
@@ -69,20 +102,10 @@ function sweepReceivers(input: FieldLightInput, rows: FiniteRows, patches: Patch
       sky: (share) => {
         straight[r] += share;
       },
-      panel: ({ stretch, front, slant, perAlong }, from, to, scale) => {
-        const { from: begin, to: end } = rows.stretches[stretch];
-        const blocks = patches.blocks[stretch];
-        const length = (end - begin) / blocks;
-        const first = Math.floor((v[r] + from * perAlong - begin) / length + 1e-9);
-        const last = Math.ceil((v[r] + to * perAlong - begin) / length - 1e-9) - 1;
-        let below = alongShare(from);
-        for (let block = first; block <= last; block += 1) {
-          const edge = block === last ? to : (begin + (block + 1) * length - v[r]) / perAlong;
-          const above = alongShare(edge);
-          const patch = patchAt(patches, stretch, front, block, slant);
-          gathered.set(patch, (gathered.get(patch) ?? 0) + (above - below) * scale);
-          below = above;
-        }
+      panel: (sighting, from, to, scale) => {
+        spreadOverPatches(rows, patches, sighting, v[r], from, to, (patch, share) => {
+          gathered.set(patch, (gathered.get(patch) ?? 0) + share * scale);
+        });
       },
     });
     for (const [patch, share] of gathered) {
@@ -120,15 +143,14 @@ function straightOnPatches(
 ): Float64Array {
   const out = new Float64Array(patches.count);
   const factor = planeFactor(rows.geometry, bearing.tangent);
-  const point = 1 / (BEAM_POINTS * BEAM_POINTS);
   eachPatch(rows, patches, (patch, front, at) => {
     if (front !== factor > 0) return;
-    for (let i = 0; i < BEAM_POINTS; i += 1) {
-      for (let j = 0; j < BEAM_POINTS; j += 1) {
-        const { u, v, z } = at((i + 0.5) / BEAM_POINTS, (j + 0.5) / BEAM_POINTS);
-        const crossed = panelsCrossed(rows, u, v, z, bearing);
-        out[patch] += point * Math.abs(factor) * transmittance ** crossed;
-      }
+    for (let i = 0; i < BEAM_LINES; i += 1) {
+      const slant = (i + 0.5) / BEAM_LINES;
+      const { u, v, z } = at(slant, 0);
+      const ends = [v, at(slant, 1).v] as const;
+      const light = meanThrough(rows, transmittance, u, ends, z, bearing);
+      out[patch] += (Math.abs(factor) / BEAM_LINES) * light;
     }
   });
   return out;
@@ -169,7 +191,7 @@ function patchReflectance(rows: FiniteRows, patches: Patches, optics: RowOptics)
  * Prepare the light over a field of rows with ends.
  *
  * Shadows of a point sun are exact. Sky light is exact along the rows and summed over the profile
- * angle. Reflections go by patches on the panel faces: beam at 9 points of each, 96 rays from
+ * angle. Reflections go by patches on the panel faces: beam on 6 lines of each, 192 rays from
  * each to ground, sky and other panels, light of second and higher orders on the ground left out.
  *
  * @throws InputError naming the part of the input that is out of range

@@ -121,3 +121,41 @@ export function panelsCrossed(
   }
   return count;
 }
+
+/**
+ * Beam left at a level line along the rows, as a mean from v = `from` to `to`.
+ *
+ * Exact: each panel crossed shades one interval of the line.
+ */
+export function meanThrough(
+  rows: FiniteRows,
+  transmittance: number,
+  u: number,
+  [from, to]: readonly [number, number],
+  z: number,
+  { tangent, along }: Bearing,
+): number {
+  const { geometry, places, stretches } = rows;
+  const factor = planeFactor(geometry, tangent);
+  if (Math.abs(factor) < 1e-12) return 1;
+  const middle = u + (geometry.midHeight - z) * tangent;
+  const reach = (geometry.width / 2) * Math.abs(factor);
+  const shades: [number, number][] = [];
+  for (let k = firstAt(places, middle - reach); k < places.length; k += 1) {
+    if (places[k] > middle + reach) break;
+    const up = meetingHeight(rows, places[k], u, z, factor);
+    if (up <= TOUCH) continue;
+    const low = Math.max(stretches[k].from - up * along, from);
+    const high = Math.min(stretches[k].to - up * along, to);
+    if (high > low) shades.push([low, high]);
+  }
+  if (shades.length === 0) return 1;
+  const edges = [from, to, ...shades.flat()].sort((a, b) => a - b);
+  let light = 0;
+  for (let e = 1; e < edges.length; e += 1) {
+    const at = (edges[e] + edges[e - 1]) / 2;
+    const crossed = shades.filter(([low, high]) => low <= at && at < high).length;
+    light += (edges[e] - edges[e - 1]) * transmittance ** crossed;
+  }
+  return light / (to - from);
+}

@@ -13,8 +13,8 @@ export interface Patches {
 
 /** Most patches of a field; longer blocks are taken beyond. */
 const MOST_PATCHES = 8000;
-const STRIPS = 8;
-const SHORTEST_BLOCK_M = 1;
+const STRIPS = 10;
+const SHORTEST_BLOCK_M = 0.5;
 
 /** Cut all faces of a field's rows. */
 export function cutPatches({ stretches }: FiniteRows): Patches {
@@ -31,16 +31,15 @@ export function cutPatches({ stretches }: FiniteRows): Patches {
   return { strips: STRIPS, starts, blocks, count };
 }
 
-/** Patch on a stretch's face. */
+/** Patch on a stretch's face, by block along and strip from the upper edge. */
 export function patchAt(
   patches: Patches,
   stretch: number,
   front: boolean,
   block: number,
-  slant: number,
+  strip: number,
 ): number {
   const { strips, starts, blocks } = patches;
-  const strip = Math.min(Math.floor(slant * strips), strips - 1);
   const within = Math.min(Math.max(block, 0), blocks[stretch] - 1);
   return starts[stretch] + ((front ? 0 : blocks[stretch]) + within) * strips + strip;
 }

@@ -1,8 +1,9 @@
 import { panelEndsAbove, planeFactor, upperSide } from '../rows/geometry.js';
 import { meetingHeight, type FiniteRows } from './finite-rows.js';
 
-/** Widest step of the profile angle between two panel edges, radians. */
-const WIDEST_STEP = 2.5 * (Math.PI / 180);
+/** Widest step of the profile angle between two panel edges, radians: for the sky alone, for panels. */
+const SKY_STEP = 2.5 * (Math.PI / 180);
+const PANEL_STEP = 1.25 * (Math.PI / 180);
 
 /** Light through panels weaker than this is left out. */
 const FAINTEST = 1e-4;
@@ -12,8 +13,9 @@ export interface Sighting {
   stretch: number;
   /** True where the front is seen (from above), false for the rear. */
   front: boolean;
-  /** Place on the slant, 0 upper edge to 1 lower edge. */
-  slant: number;
+  /** Stretch of the slant seen, 0 upper edge to 1 lower edge, rising. */
+  slantFrom: number;
+  slantTo: number;
   /** Metres along per unit of the along direction (tangent over the profile's length). */
   perAlong: number;
 }
@@ -65,8 +67,8 @@ function handOut(spans: Span[], transmittance: number, share: number, sink: Swee
 /**
  * Sweep the upper view of a receiver under finite rows, weighted for a horizontal surface.
  *
- * By the sine of the profile angle the view is split at all panel edges, exactly; in between, at steps
- * of at most 2.5 degrees, each stretch covers one interval of directions along the row, whose light is
+ * By the sine of the profile angle the view is split at all panel edges, exactly; in between, at
+ * small steps, each stretch covers one interval of directions along the row, whose light is
  * known in closed form. Nearer panels come before farther ones.
  *
  * @param u across, m; @param v along, m; @param z0 height, m
@@ -95,21 +97,33 @@ export function sweepView(
     closes[k] = Math.max(s1, s2);
   }
 
-  const spanOf = (k: number, angle: number, tangent: number, factor: number): Span => {
+  /** Place on the slant of row k at which a profile direction meets it. */
+  const slantAt = (k: number, tangent: number): number => {
+    const q =
+      (u - places[k] + (geometry.midHeight - z0) * tangent) / planeFactor(geometry, tangent);
+    const slant = (q * upperSide(geometry)) / geometry.width + 0.5;
+    return Number.isNaN(slant) ? 0.5 : Math.min(Math.max(slant, 0), 1);
+  };
+
+  const spanOf = (k: number, low: number, high: number): Span => {
+    const angle = (low + high) / 2;
+    const factor = planeFactor(geometry, Math.tan(angle));
     const up = meetingHeight(rows, places[k], u, z0, factor);
-    const q = (u - places[k] + (geometry.midHeight - z0) * tangent) / factor;
     const perAlong = Math.max(up, 1e-9) / Math.cos(angle);
-    const lean = upperSide(geometry);
+    const atLow = slantAt(k, Math.tan(low));
+    const atHigh = slantAt(k, Math.tan(high));
     return {
       stretch: k,
       front: factor < 0,
-      slant: Math.min(Math.max((q * lean) / geometry.width + 0.5, 0), 1),
+      slantFrom: Math.min(atLow, atHigh),
+      slantTo: Math.max(atLow, atHigh),
       perAlong,
       low: (stretches[k].from - v) / perAlong,
       high: (stretches[k].to - v) / perAlong,
     };
   };
 
+  const widest = sink.panel ? PANEL_STEP : SKY_STEP;
   const sweepPart = (from: number, to: number, first: number, last: number): void => {
     if (first > last) {
       sink.sky((to - from) / 2);
@@ -117,15 +131,12 @@ export function sweepView(
     }
     const low = Math.asin(from);
     const high = Math.asin(to);
-    const steps = Math.ceil((high - low) / WIDEST_STEP);
+    const steps = Math.ceil((high - low) / widest);
     for (let step = 0; step < steps; step += 1) {
       const a = low + ((high - low) * step) / steps;
       const b = low + ((high - low) * (step + 1)) / steps;
-      const angle = (a + b) / 2;
-      const tangent = Math.tan(angle);
-      const factor = planeFactor(geometry, tangent);
       const spans: Span[] = [];
-      for (let k = first; k <= last; k += 1) spans.push(spanOf(k, angle, tangent, factor));
+      for (let k = first; k <= last; k += 1) spans.push(spanOf(k, a, b));
       spans.sort((x, y) => x.perAlong - y.perAlong);
       handOut(spans, transmittance, (Math.sin(b) - Math.sin(a)) / 2, sink);
     }

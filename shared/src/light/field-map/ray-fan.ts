@@ -1,10 +1,15 @@
+import { stripAt } from '../rows/elements.js';
 import { planeFactor } from '../rows/geometry.js';
 import { firstAt, meetingHeight, type Bearing, type FiniteRows } from './finite-rows.js';
 import { eachPatch, patchAt, type PatchPoint, type Patches } from './patches.js';
 
 /** Rays from each patch: bands of equal cosine-weighted light times directions around. */
-const BANDS = 8;
+const BANDS = 16;
 const AROUND = 12;
+
+/** Steps of evenly spread sequences (golden ratio and its plane counterpart): no two fans are alike. */
+const BAND_STEP = 0.618034;
+const TURN_STEP = 0.754878;
 
 /** Light through panels weaker than this is no longer followed. */
 const FAINTEST = 0.01;
@@ -60,7 +65,7 @@ function meetings(
     const front = factor * rising < 0;
     found.push({
       distance: up * rising,
-      patch: patchAt(patches, k, front, block, Math.min(Math.max(slant, 0), 1)),
+      patch: patchAt(patches, k, front, block, stripAt(slant, patches.strips)),
     });
   }
   return found.sort((a, b) => a.distance - b.distance);
@@ -77,8 +82,8 @@ function faceAxes(tilt: number, front: boolean) {
 /**
  * Follow an even fan of rays from every patch.
  *
- * Each of the 96 rays stands for the same share of a diffuse surface's light (bands of equal squared
- * sine, evenly turned); neighbouring bands are turned against each other.
+ * Each of the 192 rays stands for the same share of a diffuse surface's light (bands of equal squared
+ * sine, evenly turned); bands and patches are shifted against each other.
  */
 export function followFans(rows: FiniteRows, patches: Patches, transmittance: number): Fans {
   const fans: Fans = {
@@ -115,10 +120,12 @@ export function followFans(rows: FiniteRows, patches: Patches, transmittance: nu
     const { normal, slope } = faceAxes(rows.geometry.tilt, front);
     const from = at(0.5, 0.5);
     for (let band = 0; band < BANDS; band += 1) {
-      const sine = Math.sqrt((band + 0.5) / BANDS);
+      const within = (patch * BAND_STEP) % 1;
+      const sine = Math.sqrt((band + within) / BANDS);
       const cosine = Math.sqrt(1 - sine * sine);
       for (let turn = 0; turn < AROUND; turn += 1) {
-        const angle = ((turn + (band % 2 ? 0.75 : 0.25)) / AROUND) * 2 * Math.PI;
+        const shift = ((patch + 5 * band) * TURN_STEP) % 1;
+        const angle = ((turn + shift) / AROUND) * 2 * Math.PI;
         const up = sine * Math.cos(angle);
         follow(
           patch,
