@@ -1,6 +1,7 @@
 // A local stand-in for an online tile server: same addresses (/{z}/{x}/{y}.png), drawn ground
 // instead of a real map, so that the demo and the tests work without a network.
 import http from 'node:http';
+import { Buffer } from 'node:buffer';
 import { deflateSync, crc32 as zlibCrc32 } from 'node:zlib';
 
 const SIZE = 256;

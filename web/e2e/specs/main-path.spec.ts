@@ -114,18 +114,13 @@ describe('from an empty patch of map to the farmer', () => {
   });
 
   it('hands the farmer a link that opens on a phone without an account', async () => {
-    const made = await page.evaluate(
-      async ([field, ids]) => {
-        const answer = await fetch('/api/reviews', {
-          method: 'POST',
-          headers: { 'content-type': 'application/json' },
-          body: JSON.stringify({ fieldId: field, scenarioIds: ids, message: 'Please look.' }),
-        });
-        return (await answer.json()) as { url: string };
-      },
-      [fieldId, scenarioIds] as const,
-    );
-    reviewUrl = made.url;
+    await page.goto(`${product.url}/fields/${fieldId}`);
+    await page.getByRole('button', { name: 'Make a review link' }).click();
+    const form = page.locator('form', { has: page.getByText('What is shown') });
+    for (const name of ['Raised rows', 'Upright rows']) await form.getByLabel(name).check();
+    await form.getByLabel('Greeting').fill('Please look.');
+    await form.getByRole('button', { name: 'Make the link' }).click();
+    reviewUrl = await page.getByLabel('Review link').inputValue();
     const phone = await openPage(browser, { viewport: PHONE });
     await phone.page.goto(reviewUrl);
     await phone.page.getByText('Test Acre').first().waitFor();
@@ -137,6 +132,24 @@ describe('from an empty patch of map to the farmer', () => {
     expect(width).toBeLessThanOrEqual(PHONE.width);
     await snap(phone.page, 'review');
     expect(phone.faults).toEqual([]);
+    await phone.page.context().close();
+  });
+
+  it('closes the link at once when the advisor revokes it', async () => {
+    await page.getByRole('button', { name: 'Done' }).click();
+    await page.getByRole('button', { name: /^Revoke the link/ }).click();
+    await page.getByRole('dialog').getByRole('button', { name: 'Revoke the link' }).click();
+    await page
+      .getByText(/revoked/i)
+      .first()
+      .waitFor();
+    const phone = await openPage(browser, { viewport: PHONE });
+    await phone.page.goto(reviewUrl);
+    await phone.page
+      .getByText(/no longer open/)
+      .first()
+      .waitFor();
+    await phone.page.context().close();
   });
 
   it('keeps what was acknowledged when the server is killed', async () => {
