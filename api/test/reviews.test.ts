@@ -204,4 +204,20 @@ describe.skipIf(!BUILT)('a review link (needs the built worker)', () => {
     await advisor.post(`${address}/restore`, undefined);
     expect((await farmer.get('/api/review')).status).toBe(200);
   });
+
+  it('shows on the desk when it was opened and when it ends soon', async () => {
+    const { token } = await makeLink({ expiresInDays: 3 });
+    await entered(token);
+    const { body } = await advisor.get('/api/desk');
+    expect(body.counts.openReviews).toBeGreaterThan(0);
+    const kinds = new Set(body.items.map((item: { kind: string }) => item.kind));
+    for (const kind of ['review-opened', 'review-expiring', 'run-finished']) {
+      expect(kinds).toContain(kind);
+    }
+    const finished = body.items.find((item: { kind: string }) => item.kind === 'run-finished');
+    expect(finished).toMatchObject({ scenarioId, fieldId: cooperative.own.field.id });
+    const farmer = await signedIn(server, cooperative, 'farmer');
+    const own = (await farmer.get('/api/desk')).body;
+    expect(own.items.filter((item: { kind: string }) => /run|review/.test(item.kind))).toEqual([]);
+  });
 });

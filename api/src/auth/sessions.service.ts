@@ -82,15 +82,6 @@ export class SessionsService {
     );
   }
 
-  /** End every session of a member, after a new password or when trust is lost. */
-  async revokeAllOf(manager: EntityManager, memberId: string): Promise<void> {
-    await manager.update(
-      SessionEntity,
-      { memberId, revokedAt: IsNull() },
-      { revokedAt: this.clock.instant() },
-    );
-  }
-
   /**
    * Rotation. The current token is renewed when old. The one before is good during the grace, and
    * as long as the current one was never seen (its answer may have been lost on the way); after

@@ -2,12 +2,14 @@ import { Module } from '@nestjs/common';
 import { AuditModule } from '../audit/audit.module.js';
 import { AuthModule } from '../auth/auth.module.js';
 import { CooperativesModule } from '../cooperatives/cooperatives.module.js';
+import { DeskModule } from '../desk/desk.module.js';
 import { FieldsModule } from '../fields/fields.module.js';
 import { RunsModule } from '../runs/runs.module.js';
 import { ScenariosModule } from '../scenarios/scenarios.module.js';
 import { WeatherModule } from '../weather/weather.module.js';
 import { ReviewCookie } from './review-cookie.js';
 import { ReviewsController } from './reviews.controller.js';
+import { ReviewsDesk } from './reviews-desk.js';
 import { ReviewsService } from './reviews.service.js';
 
 @Module({
@@ -15,13 +17,14 @@ import { ReviewsService } from './reviews.service.js';
     AuditModule,
     AuthModule,
     CooperativesModule,
+    DeskModule,
     FieldsModule,
     RunsModule,
     ScenariosModule,
     WeatherModule,
   ],
   controllers: [ReviewsController],
-  providers: [ReviewsService, ReviewCookie],
+  providers: [ReviewsService, ReviewsDesk, ReviewCookie],
   exports: [ReviewsService],
 })
 export class ReviewsModule {}

@@ -4,7 +4,7 @@ import type { RunResult, ScenarioResult } from '@furrowlight/shared/contract/res
 import type { FrozenInput, Run } from '@furrowlight/shared/contract/run';
 import { MODEL_VERSION } from '@furrowlight/shared/run/model-version';
 import { Injectable } from '@nestjs/common';
-import { In, type EntityManager } from 'typeorm';
+import { In, MoreThan, type EntityManager } from 'typeorm';
 import { AuditService } from '../audit/audit.service.js';
 import { Clock } from '../common/clock.js';
 import { DomainError, notFound } from '../common/domain-error.js';
@@ -25,6 +25,14 @@ export interface RunSubject {
 export interface FinishedRun {
   run: Run;
   frozen: FrozenInput;
+}
+
+/** How the newest run of a scenario ended. */
+export interface EndedRun {
+  scenarioId: string;
+  status: 'done' | 'failed';
+  finishedAt: string;
+  problem: string | null;
 }
 
 /**
@@ -94,6 +102,31 @@ export class RunsService {
     return new Map(
       rows.map((row) => [row.scenarioId, { run: this.toContract(row), frozen: row.frozen.input }]),
     );
+  }
+
+  /** Newest end of each scenario's runs after an instant; cancelled ones are nobody's news. */
+  async endedSince(cooperativeId: string, since: string): Promise<EndedRun[]> {
+    const rows = await this.database.read.find(RunEntity, {
+      select: { id: true, scenarioId: true, status: true, finishedAt: true, problem: true },
+      where: {
+        cooperativeId,
+        status: In(['done', 'failed']),
+        finishedAt: MoreThan(since),
+      },
+      order: { createdAt: 'ASC' },
+    });
+    const newest = new Map(
+      rows.map(({ scenarioId, status, finishedAt, problem }): [string, EndedRun] => [
+        scenarioId,
+        {
+          scenarioId,
+          status: status === 'done' ? 'done' : 'failed',
+          finishedAt: finishedAt ?? since,
+          problem,
+        },
+      ]),
+    );
+    return [...newest.values()];
   }
 
   /** Has any run of the scenario finished well? Its layout is closed then. */

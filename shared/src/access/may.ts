@@ -21,20 +21,13 @@ export interface LinkPrincipal {
 
 export type Principal = MemberPrincipal | LinkPrincipal;
 
-/** What of a farm decides who may reach it. */
-export interface FarmAccess {
-  cooperativeId: string;
-  /** The member who farms it, where that person has an account. */
-  farmerMemberId: string | null;
-}
-
 /** Which farms, and with them fields and all that hangs on them, a principal may reach. */
 export type FarmScope =
   | { kind: 'cooperative'; cooperativeId: string }
   | { kind: 'held-by'; cooperativeId: string; memberId: string }
   | { kind: 'none' };
 
-/** Does the principal hold the permission at all? Rows are judged by `mayReachFarm`. */
+/** Does the principal hold the permission at all? Which rows it counts for says `farmScope`. */
 export function holds(principal: Principal, permission: Permission): boolean {
   if (isLinkPermission(permission)) return principal.kind === 'review-link';
   if (principal.kind !== 'member') return false;
@@ -56,16 +49,4 @@ export function farmScope(principal: Principal): FarmScope {
     default:
       return { kind: 'none' };
   }
-}
-
-/** May the principal reach this one farm? */
-export function mayReachFarm(principal: Principal, farm: FarmAccess): boolean {
-  const scope = farmScope(principal);
-  if (scope.kind === 'none' || scope.cooperativeId !== farm.cooperativeId) return false;
-  return scope.kind === 'cooperative' || farm.farmerMemberId === scope.memberId;
-}
-
-/** May the principal see what a review link of this field and these scenarios shows? */
-export function mayReadReviewPage(principal: Principal, reviewId: string): boolean {
-  return principal.kind === 'review-link' && principal.reviewId === reviewId;
 }
