@@ -81,6 +81,66 @@ function ozoneMass(cosZenith: number): number {
   return (1 + 22 / 6370) / Math.sqrt(cosZenith * cosZenith + (2 * 22) / 6370);
 }
 
+/** What does not depend on the sun's place, by wavelength; made once for many suns. */
+export interface Air {
+  atmosphere: Atmosphere;
+  /** Aerosol optical depth, and the share of it that scatters. */
+  depth: Float64Array;
+  scattering: Float64Array;
+  /** Share of light thrown up by the ground that the sky throws back. */
+  skyReflectance: Float64Array;
+  ground: Float64Array;
+}
+
+/** Sun above the air at mean distance, W m-2 nm-1. */
+const ABOVE: Record<SunSpectrum, Float64Array> = {
+  corrected: Float64Array.from(BIRD_RIORDAN, ([nm], i) => blackbodySun(nm) * SOLAR_CORRECTION[i]),
+  blackbody: Float64Array.from(BIRD_RIORDAN, ([nm]) => blackbodySun(nm)),
+};
+
+function requireAtmosphere(atmosphere: Atmosphere): void {
+  requireWithin('pressureHpa', atmosphere.pressureHpa, 300, 1100, 'hPa');
+  requireWithin('waterCm', atmosphere.waterCm, 0, 10, 'cm');
+  requireWithin('ozoneAtmCm', atmosphere.ozoneAtmCm, 0, 1, 'atm-cm');
+  requireWithin('aerosol500', atmosphere.aerosol500, 0, 3);
+}
+
+/**
+ * Prepare the air for spectra at many suns.
+ *
+ * @throws InputError naming a part of the atmosphere
+ */
+export function prepareAir(atmosphere: Atmosphere): Air {
+  requireAtmosphere(atmosphere);
+  const column = () => new Float64Array(BIRD_RIORDAN.length);
+  const air: Air = {
+    atmosphere,
+    depth: column(),
+    scattering: column(),
+    skyReflectance: column(),
+    ground: column(),
+  };
+  const downBack = forwardShare(1 / BACK_PATH);
+  for (let i = 0; i < BIRD_RIORDAN.length; i += 1) {
+    const [nm, , waterCoefficient, , gasCoefficient] = BIRD_RIORDAN[i];
+    const um = nm / 1000;
+    const depth = atmosphere.aerosol500 * Math.pow(um / 0.5, -AEROSOL_EXPONENT);
+    const scattering = SCATTERING_400 * Math.exp(-SCATTERING_SLOPE * Math.log(um / 0.4) ** 2);
+    const molecules = rayleigh(um, BACK_PATH);
+    const scattered = Math.exp(-scattering * depth * BACK_PATH);
+    air.depth[i] = depth;
+    air.scattering[i] = scattering;
+    air.skyReflectance[i] =
+      mixedGas(gasCoefficient, BACK_PATH) *
+      water(waterCoefficient, atmosphere.waterCm, BACK_PATH) *
+      Math.exp(-(1 - scattering) * depth * BACK_PATH) *
+      (0.5 * (1 - molecules) + (1 - downBack) * molecules * (1 - scattered));
+    air.ground[i] =
+      typeof atmosphere.albedo === 'number' ? atmosphere.albedo : atmosphere.albedo(nm);
+  }
+  return air;
+}
+
 /**
  * Clear-sky spectra at the ground.
  *
@@ -95,31 +155,35 @@ function ozoneMass(cosZenith: number): number {
  * exponent 1.14, single scattering albedo 0.945 at 400 nm, asymmetry 0.65; air mass after Kasten &
  * Young 1989. Departure: the extraterrestrial spectrum is Planck times SOLAR_CORRECTION.
  */
-export function clearSkySpectrum(
+export const clearSkySpectrum = (
   apparentZenith: number,
   atmosphere: Atmosphere,
   distance = 1,
   sun: SunSpectrum = 'corrected',
+): ClearSkySpectrum => spectrumThrough(prepareAir(atmosphere), apparentZenith, distance, sun);
+
+/** Clear-sky spectra through prepared air; see clearSkySpectrum. */
+export function spectrumThrough(
+  air: Air,
+  apparentZenith: number,
+  distance = 1,
+  sun: SunSpectrum = 'corrected',
 ): ClearSkySpectrum {
   requireWithin('apparentZenith', apparentZenith, 0, 1.5707, 'rad');
-  requireWithin('pressureHpa', atmosphere.pressureHpa, 300, 1100, 'hPa');
-  requireWithin('waterCm', atmosphere.waterCm, 0, 10, 'cm');
-  requireWithin('ozoneAtmCm', atmosphere.ozoneAtmCm, 0, 1, 'atm-cm');
-  requireWithin('aerosol500', atmosphere.aerosol500, 0, 3);
+  const { atmosphere } = air;
   const cosZenith = Math.cos(apparentZenith);
   const mass = airMass(apparentZenith);
   const pressureMass = (mass * atmosphere.pressureHpa) / 1013;
   const down = forwardShare(cosZenith);
-  const downBack = forwardShare(1 / BACK_PATH);
   const ozonePath = atmosphere.ozoneAtmCm * ozoneMass(cosZenith);
   const direct = new Float64Array(BIRD_RIORDAN.length);
   const diffuse = new Float64Array(BIRD_RIORDAN.length);
   for (let i = 0; i < BIRD_RIORDAN.length; i += 1) {
     const [nm, , waterCoefficient, ozoneCoefficient, gasCoefficient] = BIRD_RIORDAN[i];
     const um = nm / 1000;
-    const above = blackbodySun(nm) * (sun === 'corrected' ? SOLAR_CORRECTION[i] : 1) * distance;
-    const depth = atmosphere.aerosol500 * Math.pow(um / 0.5, -AEROSOL_EXPONENT);
-    const scattering = SCATTERING_400 * Math.exp(-SCATTERING_SLOPE * Math.log(um / 0.4) ** 2);
+    const above = ABOVE[sun][i] * distance;
+    const depth = air.depth[i];
+    const scattering = air.scattering[i];
     const molecules = rayleigh(um, pressureMass);
     const gases =
       water(waterCoefficient, atmosphere.waterCm, mass) *
@@ -132,19 +196,8 @@ export function clearSkySpectrum(
     const entering = above * cosZenith * gases * absorbed;
     const fromMolecules = entering * (1 - Math.pow(molecules, 0.95)) * 0.5;
     const fromAerosol = entering * Math.pow(molecules, 1.5) * (1 - scattered) * down;
-
-    const moleculesBack = rayleigh(um, BACK_PATH);
-    const scatteredBack = Math.exp(-scattering * depth * BACK_PATH);
-    const skyReflectance =
-      mixedGas(gasCoefficient, BACK_PATH) *
-      water(waterCoefficient, atmosphere.waterCm, BACK_PATH) *
-      Math.exp(-(1 - scattering) * depth * BACK_PATH) *
-      (0.5 * (1 - moleculesBack) + (1 - downBack) * moleculesBack * (1 - scatteredBack));
-    const ground =
-      typeof atmosphere.albedo === 'number' ? atmosphere.albedo : atmosphere.albedo(nm);
-    const bounced =
-      ((direct[i] * cosZenith + fromMolecules + fromAerosol) * skyReflectance * ground) /
-      (1 - skyReflectance * ground);
+    const sent = (direct[i] * cosZenith + fromMolecules + fromAerosol) * air.ground[i];
+    const bounced = (sent * air.skyReflectance[i]) / (1 - air.skyReflectance[i] * air.ground[i]);
     const blueBoost = um <= 0.45 ? Math.pow(um + 0.55, 1.8) : 1;
     diffuse[i] = (fromMolecules + fromAerosol + bounced) * blueBoost;
   }

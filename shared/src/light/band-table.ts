@@ -1,5 +1,5 @@
 import { DEG } from './angles.js';
-import { clearSkySpectrum, WAVELENGTHS_NM, type Atmosphere } from './atmosphere.js';
+import { prepareAir, spectrumThrough, WAVELENGTHS_NM, type Atmosphere } from './atmosphere.js';
 import { BAND_COUNT, BAND_EDGES_NM, integrateSpectrum, micromolPerJoule } from './spectrum.js';
 
 /**
@@ -98,10 +98,11 @@ export function prepareBandTable(atmosphere: Atmosphere): BandTable {
     directWm2: new Float64Array(ALTITUDES),
     diffuseWm2: new Float64Array(ALTITUDES),
   };
+  const air = prepareAir(atmosphere);
   const global = new Float64Array(WAVELENGTHS_NM.length);
   for (let altitude = 0; altitude < ALTITUDES; altitude += 1) {
     const zenith = (90 - Math.max(altitude, LOWEST_ALTITUDE_DEG)) * DEG;
-    const { direct, diffuse } = clearSkySpectrum(zenith, atmosphere);
+    const { direct, diffuse } = spectrumThrough(air, zenith);
     const offset = altitude * MAKEUP_LENGTH;
     table.directWm2[altitude] = makeupOf(direct, table.direct, offset);
     table.diffuseWm2[altitude] = makeupOf(diffuse, table.clearDiffuse, offset);
