@@ -37,7 +37,7 @@ export function CropLight({ scenario }: Props) {
           <p className={classes.small}>
             The open field gets {withUnit(budget.openDli, 'mol m⁻² d⁻¹', 1)}.
             {critical &&
-              ` In the weeks that decide most (${critical.label.toLowerCase()}) the average is ${percent(critical.meanShare)} and the darkest strip ${percent(critical.darkestShare)} of open field.`}
+              ` In the weeks that decide most (${critical.label.charAt(0).toLowerCase()}${critical.label.slice(1)}) the average is ${percent(critical.meanShare)} and the darkest strip ${percent(critical.darkestShare)} of open field.`}
           </p>
         </article>
       ))}

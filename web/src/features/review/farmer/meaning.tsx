@@ -32,7 +32,7 @@ const MACHINES: Implement[] = [
 const WAYS = { working: 'passes at work', folded: 'passes only folded', blocked: 'does not pass' };
 
 function yieldWords({ yield: range }: CropBudget): string {
-  if (range.low === null || range.high === null) return range.basis;
+  if (range.low === null || range.high === null) return `No figure is given. ${range.basis}`;
   const low = Math.round(range.low * 100);
   const high = Math.round(range.high * 100);
   const span = low === high ? `about ${low} %` : `${low} to ${high} %`;

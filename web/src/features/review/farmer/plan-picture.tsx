@@ -7,11 +7,22 @@ import { planDrawing } from './plan-geometry';
 
 type Scenario = ReviewPage['scenarios'][number];
 
+const COMPASS: Record<string, string> = {
+  N: 'north',
+  NE: 'north-east',
+  E: 'east',
+  SE: 'south-east',
+  S: 'south',
+  SW: 'south-west',
+  W: 'west',
+  NW: 'north-west',
+};
+
 function words({ layout, figures }: Scenario): string {
   const facing =
     layout.kind === 'single-axis-tracker'
       ? 'turning with the sun'
-      : `front to the ${compassPoint(layout.azimuthDeg)}`;
+      : `front to the ${COMPASS[compassPoint(layout.azimuthDeg)]}`;
   const rows = figures ? `${formatNumber(figures.rowCount)} rows` : 'Rows';
   return `${rows}, ${withUnit(layout.pitchM, 'm', 1)} from row to row, panels ${withUnit(layout.collectorWidthM, 'm', 1)} wide, ${facing}. The lowest edge is ${withUnit(layout.clearHeightM, 'm', 1)} above the ground.`;
 }
