@@ -6,6 +6,7 @@ import { measured } from './groups/measured.js';
 import { planck } from './groups/planck.js';
 import { raytracedDays } from './groups/raytraced-days.js';
 import { raytracedEndless } from './groups/raytraced-endless.js';
+import { raytracedFinite } from './groups/raytraced-finite.js';
 import { raytracedGaps } from './groups/raytraced-gaps.js';
 import { rows2d } from './groups/rows2d.js';
 import { sky } from './groups/sky.js';
@@ -23,6 +24,7 @@ export const GROUPS: readonly Group[] = [
   rows2d,
   raytracedEndless,
   raytracedGaps,
+  raytracedFinite,
   raytracedDays,
   tracker,
   faiman,
