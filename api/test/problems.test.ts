@@ -148,19 +148,12 @@ describe('headers', () => {
 
 describe('the pages', () => {
   it('are one page for every address of the app, asked for anew each time', async () => {
-    for (const address of ['/', '/fields', '/fields/abc/scenarios']) {
+    for (const address of ['/', '/fields', '/fields/abc/scenarios', '/r']) {
       const response = await server.visitor().get(address);
       expect(response.status).toBe(200);
       expect(response.text).toMatch('<title>app</title>');
       expect(response.headers['cache-control']).toBe('no-cache');
     }
-  });
-
-  it('are the small one behind a review link', async () => {
-    for (const address of ['/r', '/r/some-token']) {
-      expect((await server.visitor().get(address)).text).toMatch('<title>review</title>');
-    }
-    expect((await server.visitor().get('/rows')).text).toMatch('<title>app</title>');
   });
 
   it('have assets that are kept, and a missing asset is never a page', async () => {

@@ -27,7 +27,6 @@ export interface TestServer {
 function writePages(folder: string): void {
   mkdirSync(path.join(folder, 'assets'), { recursive: true });
   writeFileSync(path.join(folder, 'index.html'), '<title>app</title>');
-  writeFileSync(path.join(folder, 'review.html'), '<title>review</title>');
   writeFileSync(path.join(folder, 'assets', 'app-1a2b.js'), 'export {};');
 }
 
