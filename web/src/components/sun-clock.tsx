@@ -59,7 +59,7 @@ export function SunClock({ time, onChange }: Props) {
       <div className={classes.slider}>
         <span>Hour</span>
         <Slider
-          aria-label="Hour"
+          thumbLabel="Hour"
           min={0}
           max={24}
           step={0.25}
@@ -73,7 +73,7 @@ export function SunClock({ time, onChange }: Props) {
       <div className={classes.slider}>
         <span>Date</span>
         <Slider
-          aria-label="Date"
+          thumbLabel="Date"
           min={0}
           max={364}
           step={1}

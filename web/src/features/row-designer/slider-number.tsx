@@ -41,7 +41,7 @@ export function SliderNumber(props: SliderNumberProps) {
         size="sm"
       />
       <Slider
-        aria-label={`${label}, slider`}
+        thumbLabel={`${label}, slider`}
         min={min}
         max={max}
         step={step}
