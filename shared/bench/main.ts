@@ -1,6 +1,7 @@
 import { preparePreview, previewLayout } from '../src/run/preview.js';
 import { runScenario } from '../src/run/run-scenario.js';
 import { startCandidates } from './candidates.js';
+import { seasonOverField } from './field-map.js';
 import { benchWeather, OVERHEAD, SITE, TRACKER, yearInput } from './inputs.js';
 import { prepareKernel } from './kernel.js';
 
@@ -69,6 +70,11 @@ function tasks(): { list: Task[]; close(): Promise<void> } {
       year('the same with tracker', TRACKER, 1),
       preview('live preview, one season, 40 positions', OVERHEAD),
       preview('live preview with tracker', TRACKER),
+      {
+        name: 'field map, 10,000 receivers, finite rows, a season by week, without reflections',
+        aimSeconds: 3,
+        run: () => void seasonOverField(),
+      },
       {
         name: '1,000 candidate layouts, a year each at half-hour suns and 40 positions, 2 threads',
         aimSeconds: 60,
