@@ -1,6 +1,6 @@
 import { clearSky } from './groups/clear-sky.js';
 import { faiman } from './groups/faiman.js';
-import { fao56 } from './groups/fao56.js';
+import { fao56, fao56Radiation } from './groups/fao56.js';
 import { g173 } from './groups/g173.js';
 import { measured } from './groups/measured.js';
 import { planck } from './groups/planck.js';
@@ -29,5 +29,6 @@ export const GROUPS: readonly Group[] = [
   tracker,
   faiman,
   fao56,
+  fao56Radiation,
   measured,
 ];

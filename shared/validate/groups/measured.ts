@@ -25,6 +25,9 @@ interface Site {
   utc_offset_h: number;
 }
 
+/** Measured and clear-sky PPFD of one day, umol m-2 s-1, by local standard hour. */
+type DayCourse = { measured: number; clear: number; hour: number }[];
+
 const ALBEDO = 0.2;
 /** Sun altitude below which sensors' cosine errors rule, degrees. */
 const LOW_SUN_DEG = 10;
@@ -48,12 +51,14 @@ function surfradDay(folder: string, site: Site): Quantity[] {
   for (const line of lines) {
     const c = line.trim().split(/\s+/).map(Number);
     if (c.length < 32) continue;
-    // Global and its flag, direct, PAR and its flag; flag 0 is good.
-    const [global, globalFlag, direct, par, parFlag] = [8, 9, 12, 30, 31].map((i) => c[i]);
+    // Global, direct and PAR, each with its flag; flag 0 is good.
+    const [global, globalFlag, direct, directFlag, par, parFlag] = [8, 9, 12, 13, 30, 31].map(
+      (i) => c[i],
+    );
     const instant = Date.UTC(c[0], c[2] - 1, c[3], c[4], c[5]);
     const { altitude } = sunPosition(instant, site.latitude, site.longitude);
-    if (altitude < (LOW_SUN_DEG * Math.PI) / 180 || globalFlag !== 0 || parFlag !== 0) continue;
-    if (!(global > 5)) continue;
+    if (altitude < (LOW_SUN_DEG * Math.PI) / 180 || !(global > 5)) continue;
+    if (globalFlag !== 0 || directFlag !== 0 || parFlag !== 0) continue;
     const dni = Math.max(direct, 0);
     const beam = Math.min(dni * Math.sin(altitude), global);
     splitBands(table, altitude, dni, distanceFactor(c[1]), split);
@@ -75,7 +80,7 @@ function surfradDay(folder: string, site: Site): Quantity[] {
 function recordByDay(folder: string, site: Site) {
   const table = prepareBandTable(defaultAtmosphere(site.elevation_m, ALBEDO));
   const split = emptyBandSplit();
-  const days = new Map<string, { measured: number; clear: number; hour: number }[]>();
+  const days = new Map<string, DayCourse>();
   for (const row of readTable(join(folder, 'measured', site.file))) {
     if (row.PPFD === undefined || row.PPFD.trim() === '' || Number(row.PPFD_qc ?? 0) !== 0)
       continue;
@@ -108,21 +113,26 @@ function stampOf(row: TableRow, hour: number, site: Site): [string, number] {
 
 /** Correlation of a day with the clear-sky course above which it counts as clear. */
 const CLEAR_CORRELATION = 0.99;
-/** Unevenness of the midday ratio measured / clear below which no cloud crossed the sun. */
-const CLEAR_SPREAD = 0.04;
-
 /**
- * A clear day by its shape alone, so that a model that is too bright or dark is not excused: the
- * day follows the clear-sky course and the ratio is even over the six hours about noon.
+ * Unevenness of the midday ratio measured / clear below which no cloud crossed the sun; the wider
+ * ones are asked only of a record without a day that even.
  */
-function isClear(day: { measured: number; clear: number; hour: number }[]): boolean {
+const CLEAR_SPREADS = [0.04, 0.07, 0.1];
+/** Least midday ratio of a clear day, far below any honest clear-sky error. */
+const CLEAR_LEAST = 0.75;
+
+/** Mean of the midday ratio measured / clear and its relative unevenness. */
+function middayRatio(day: DayCourse): { mean: number; spread: number } | null {
   const midday = day.filter(({ hour }) => hour >= 9 && hour < 15);
-  if (midday.length < 10) return false;
+  if (midday.length < 10) return null;
   const ratios = midday.map(({ measured, clear }) => measured / clear);
   const mean = ratios.reduce((sum, value) => sum + value, 0) / ratios.length;
-  const spread = Math.sqrt(
-    ratios.reduce((sum, value) => sum + (value - mean) ** 2, 0) / ratios.length,
-  );
+  const square = ratios.reduce((sum, value) => sum + (value - mean) ** 2, 0) / ratios.length;
+  return { mean, spread: Math.sqrt(square) / mean };
+}
+
+/** Correlation about nought of a day with its clear-sky course. */
+function likeness(day: DayCourse): number {
   const bright = day.filter(({ clear }) => clear > 50);
   let dot = 0;
   let a = 0;
@@ -132,14 +142,29 @@ function isClear(day: { measured: number; clear: number; hour: number }[]): bool
     a += measured ** 2;
     b += clear ** 2;
   }
-  return spread / mean < CLEAR_SPREAD && dot / Math.sqrt(a * b) > CLEAR_CORRELATION && mean > 0.6;
+  return dot / Math.sqrt(a * b);
+}
+
+/**
+ * Clear days by their shape alone, so that a model that is too bright or dark is not excused: the
+ * day follows the clear-sky course and the ratio is even over the six hours about noon.
+ */
+function clearDays(days: DayCourse[]): DayCourse[] {
+  for (const limit of CLEAR_SPREADS) {
+    const clear = days.filter((day) => {
+      const ratio = middayRatio(day);
+      if (!ratio || ratio.spread >= limit || ratio.mean <= CLEAR_LEAST) return false;
+      return likeness(day) > CLEAR_CORRELATION;
+    });
+    if (clear.length > 0) return clear;
+  }
+  return [];
 }
 
 /** Noon PPFD on clear days against the clear-sky envelope. */
 function clearNoons(folder: string, site: Site): Quantity[] {
   const noon = new ErrorTally(NAME, `${site.file}: PPFD at noon on clear days`, '%', 8);
-  for (const day of recordByDay(folder, site).values()) {
-    if (!isClear(day)) continue;
+  for (const day of clearDays([...recordByDay(folder, site).values()])) {
     const about = day.filter(({ hour }) => hour >= 11 && hour < 13);
     const sum = (pick: 'measured' | 'clear') => about.reduce((total, at) => total + at[pick], 0);
     noon.add(100 * (sum('clear') / sum('measured') - 1));
