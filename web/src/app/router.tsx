@@ -75,6 +75,12 @@ const pages: RouteObject[] = [
     }),
   },
   {
+    path: 'cooperative',
+    lazy: async () => ({
+      Component: (await import('../features/cooperative/cooperative-page')).CooperativePage,
+    }),
+  },
+  {
     path: 'weather',
     lazy: async () => ({
       Component: (await import('../features/weather/weather-page')).WeatherPage,

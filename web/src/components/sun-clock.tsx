@@ -66,6 +66,7 @@ export function SunClock({ time, onChange }: Props) {
           value={time.hour}
           onChange={(hour) => onChange({ ...time, hour })}
           label={null}
+          classNames={{ thumb: classes.thumb }}
           thumbProps={{ 'aria-valuetext': hourName(time.hour) }}
         />
         <b>{hourName(time.hour)}</b>
@@ -80,6 +81,7 @@ export function SunClock({ time, onChange }: Props) {
           value={time.day}
           onChange={(day) => onChange({ ...time, day })}
           label={null}
+          classNames={{ thumb: classes.thumb }}
           thumbProps={{ 'aria-valuetext': dayName(time.day) }}
         />
         <b>{dayName(time.day)}</b>

@@ -73,3 +73,8 @@ export function ago(instant: string, now: Date): string {
   if (minutes < 24 * 60) return relative.format(-Math.round(minutes / 60), 'hour');
   return relative.format(-Math.round(minutes / 1440), 'day');
 }
+
+/** A count with its noun, such as `1 season` or `3 seasons`. */
+export function countOf(count: number, noun: string): string {
+  return `${formatNumber(count)} ${noun}${count === 1 ? '' : 's'}`;
+}

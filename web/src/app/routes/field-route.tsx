@@ -8,6 +8,7 @@ import { FieldMenu } from '../../features/field-map/overview/field-menu';
 import { FieldOverview } from '../../features/field-map/overview/field-overview';
 import { ReviewLinks } from '../../features/review/review-links';
 import { ApiProblem } from '../../lib/api';
+import { mayDo } from '../../lib/use-may';
 import { noteRecent } from '../../lib/recent';
 import { fieldQuery } from '../../queries/fields';
 import { sessionQuery } from '../../queries/session';
@@ -19,6 +20,7 @@ export function FieldRoute() {
   const session = useQuery(sessionQuery);
   const field = useQuery(fieldQuery(fieldId));
   const memberId = session.data?.memberId;
+  const maySeeReviews = mayDo(session.data, 'reviews:read');
   const name = field.data?.name;
   const farmName = field.data?.farmName;
 
@@ -55,7 +57,7 @@ export function FieldRoute() {
       <FieldOverview
         key={field.data.id}
         field={field.data}
-        reviews={<ReviewLinks fieldId={field.data.id} />}
+        reviews={maySeeReviews && <ReviewLinks fieldId={field.data.id} />}
       />
     </>
   );

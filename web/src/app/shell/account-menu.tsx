@@ -10,10 +10,12 @@ import {
 } from '@mantine/core';
 import { IconDoorExit, IconSelector } from '@tabler/icons-react';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useNavigate } from 'react-router-dom';
+import { Link, useNavigate } from 'react-router-dom';
+import { mayDo } from '../../lib/use-may';
 import { signOut } from '../../queries/session';
 import classes from './account-menu.module.css';
 import { forgetRecent } from '../../lib/recent';
+import { NAV_MORE } from './nav-items';
 import { useShortcutsAllowed } from './use-jump-keys';
 
 function initials(name: string): string {
@@ -87,6 +89,17 @@ export function AccountMenu({ session, compact }: { session: Session; compact?: 
           />
         </div>
         <Menu.Divider />
+        {compact &&
+          NAV_MORE.filter(({ needs }) => !needs || mayDo(session, needs)).map((item) => (
+            <Menu.Item
+              key={item.to}
+              component={Link}
+              to={item.to}
+              leftSection={<item.icon size={16} stroke={1.6} />}
+            >
+              {item.label}
+            </Menu.Item>
+          ))}
         <Menu.Item
           leftSection={<IconDoorExit size={16} stroke={1.6} />}
           onClick={() => void out()}

@@ -1,3 +1,4 @@
+import type { MemberPermission } from '@furrowlight/shared/access/permissions';
 import {
   IconBuildingCottage,
   IconCloudRain,
@@ -5,6 +6,7 @@ import {
   IconMap2,
   IconSunHigh,
   IconTableRow,
+  IconUsersGroup,
   type Icon,
 } from '@tabler/icons-react';
 
@@ -14,6 +16,8 @@ export interface NavItem {
   icon: Icon;
   /** Second key after `g`. */
   key: string;
+  /** Shown only to those who hold it. */
+  needs?: MemberPermission;
 }
 
 export const NAV: readonly NavItem[] = [
@@ -24,6 +28,13 @@ export const NAV: readonly NavItem[] = [
 ];
 
 export const NAV_MORE: readonly NavItem[] = [
+  {
+    to: '/cooperative',
+    label: 'Cooperative',
+    icon: IconUsersGroup,
+    key: 'c',
+    needs: 'members:read',
+  },
   { to: '/how-we-know', label: 'How we know', icon: IconSunHigh, key: 'k' },
   { to: '/help', label: 'Help', icon: IconLifebuoy, key: 'h' },
 ];

@@ -5,6 +5,7 @@ import { IconSearch } from '@tabler/icons-react';
 import { useEffect, useRef, type ReactNode } from 'react';
 import { Link, NavLink, useLocation } from 'react-router-dom';
 import { Mark, Wordmark } from '../../components/wordmark';
+import { mayDo } from '../../lib/use-may';
 import { AccountMenu } from './account-menu';
 import { NAV, NAV_MORE, type NavItem } from './nav-items';
 import { CommandPalette } from './palette/command-palette';
@@ -62,7 +63,7 @@ export function Shell({ session, children }: { session: Session; children: React
         <RecentPlaces memberId={session.memberId} />
         <div className={classes.foot}>
           <nav aria-label="About">
-            {NAV_MORE.map((item) => (
+            {NAV_MORE.filter(({ needs }) => !needs || mayDo(session, needs)).map((item) => (
               <NavRow key={item.to} item={item} />
             ))}
           </nav>
@@ -90,7 +91,7 @@ export function Shell({ session, children }: { session: Session; children: React
           </NavLink>
         ))}
       </nav>
-      <CommandPalette opened={searching} onClose={search.close} memberId={session.memberId} />
+      <CommandPalette opened={searching} onClose={search.close} session={session} />
     </div>
   );
 }

@@ -7,21 +7,25 @@ import { ErrorPanel } from '../../components/error-panel';
 import { PageHead } from '../../components/page-head';
 import { Section } from '../../components/section';
 import { ago, formatNumber } from '../../lib/format';
+import { useMay } from '../../lib/use-may';
 import { deskQuery } from '../../queries/desk';
 import { GROUPS, KINDS, placeOf } from './desk-items';
 import classes from './desk-page.module.css';
 import { FirstSteps } from './first-steps';
 
 export function DeskPage() {
+  const mayAdd = useMay('fields:write');
   const desk = useQuery({ ...deskQuery, refetchInterval: 30_000 });
   return (
     <>
       <PageHead
         title="Desk"
         actions={
-          <Button component={Link} to="/fields?add=draw" leftSection={<IconPlus size={16} />}>
-            Add a field
-          </Button>
+          mayAdd && (
+            <Button component={Link} to="/fields?add=draw" leftSection={<IconPlus size={16} />}>
+              Add a field
+            </Button>
+          )
         }
       >
         What wants your attention, most pressing first.

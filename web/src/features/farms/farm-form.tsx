@@ -1,17 +1,20 @@
-import { FarmInput, type Farm } from '@furrowlight/shared/contract/farms';
+import { FarmInput, type Farm, type FarmPatch } from '@furrowlight/shared/contract/farms';
 import { Button, Group, Select, Textarea, TextInput } from '@mantine/core';
-import { modals } from '@mantine/modals';
 import { notifications } from '@mantine/notifications';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import { useState, type FormEvent } from 'react';
+import { useMemo, useState, type FormEvent } from 'react';
 import { ConflictPanel } from '../../components/conflict-panel';
 import { DraftNote } from '../../components/draft-note';
 import { ErrorPanel } from '../../components/error-panel';
 import { ErrorSummary } from '../../components/error-summary';
+import { showUndo } from '../../components/undo-notice';
 import { ApiProblem, newIdempotencyKey } from '../../lib/api';
 import { fieldMessages } from '../../lib/field-messages';
-import { useDraft } from '../../lib/use-draft';
-import { changeFarm, createFarm, farmQuery, removeFarm } from '../../queries/farms';
+import { changesOf } from '../../lib/merge';
+import { showRefusal } from '../../lib/show-refusal';
+import { useBasedDraft } from '../../lib/use-based-draft';
+import { restore } from '../../queries/bin';
+import { changeFarm, createFarm, farmListQuery, farmQuery, removeFarm } from '../../queries/farms';
 import { memberListQuery } from '../../queries/members';
 import classes from './farms.module.css';
 
@@ -33,18 +36,20 @@ function useFarmWrites(farm: Farm | null) {
   const create = useMutation(createFarm(client));
   const change = useMutation(changeFarm(client));
   const remove = useMutation(removeFarm(client));
+  const bringBack = useMutation(restore(client));
   const [key] = useState(newIdempotencyKey);
-  const save = (input: FarmInput, version = farm?.version) =>
-    farm && version
-      ? change.mutateAsync({ id: farm.id, version, patch: input })
+  const save = (input: FarmInput, patch: FarmPatch, version: number) =>
+    farm
+      ? change.mutateAsync({ id: farm.id, version, patch })
       : create.mutateAsync({ input, idempotencyKey: key });
-  return { client, save, remove, saving: create.isPending || change.isPending };
+  return { client, save, remove, bringBack, saving: create.isPending || change.isPending };
 }
 
 export function FarmForm({ farm, onDone }: { farm: Farm | null; onDone: () => void }) {
-  const { client, save, remove, saving } = useFarmWrites(farm);
+  const { client, save, remove, bringBack, saving } = useFarmWrites(farm);
   const members = useQuery(memberListQuery);
-  const draft = useDraft(`farm:${farm?.id ?? 'new'}`, valuesOf(farm));
+  const current = useMemo(() => valuesOf(farm), [farm]);
+  const draft = useBasedDraft(`farm:${farm?.id ?? 'new'}`, current, farm?.version ?? 0);
   const [messages, setMessages] = useState<Record<string, string>>({});
   const [problem, setProblem] = useState<unknown>(null);
   const values = draft.value;
@@ -57,14 +62,14 @@ export function FarmForm({ farm, onDone }: { farm: Farm | null; onDone: () => vo
   });
   const conflict = problem instanceof ApiProblem && problem.status === 412;
 
-  const submit = async (version?: number) => {
+  const submit = async (version = draft.base.version) => {
     const found = fieldMessages(FarmInput, values);
     setMessages(found);
     setProblem(null);
     if (Object.keys(found).length > 0) return;
     try {
-      await save(values, version);
-      draft.clear(values);
+      await save(values, changesOf(draft.base.value, values), version);
+      draft.clear();
       notifications.show({
         message: farm ? `${values.name} is saved.` : `${values.name} is added.`,
       });
@@ -79,9 +84,8 @@ export function FarmForm({ farm, onDone }: { farm: Farm | null; onDone: () => vo
     void submit();
   };
   const takeTheirs = async () => {
-    if (!farm) return;
-    const theirs = await client.fetchQuery({ ...farmQuery(farm.id), staleTime: 0 });
-    draft.clear(valuesOf(theirs));
+    await client.invalidateQueries({ queryKey: farmListQuery.queryKey });
+    draft.clear();
     setProblem(null);
   };
   const keepMine = async () => {
@@ -89,25 +93,18 @@ export function FarmForm({ farm, onDone }: { farm: Farm | null; onDone: () => vo
     const theirs = await client.fetchQuery({ ...farmQuery(farm.id), staleTime: 0 });
     await submit(theirs.version);
   };
-  const askRemoval = (doomed: Farm) =>
-    modals.openConfirmModal({
-      title: `Remove ${doomed.name}?`,
-      children:
-        doomed.fieldCount > 0
-          ? `Its ${doomed.fieldCount} fields with their scenarios and results go with it. This cannot be undone.`
-          : 'The farm has no fields. This cannot be undone.',
-      labels: { confirm: 'Remove the farm', cancel: 'Keep it' },
-      confirmProps: { color: 'danger' },
-      onConfirm: () => {
-        remove
-          .mutateAsync({ id: doomed.id, version: doomed.version })
-          .then(() => {
-            notifications.show({ message: `${doomed.name} is removed.` });
-            onDone();
-          })
-          .catch(setProblem);
-      },
-    });
+  const putAway = (doomed: Farm) =>
+    remove
+      .mutateAsync({ id: doomed.id, version: doomed.version })
+      .then(() => {
+        showUndo(`${doomed.name} is in the bin for 30 days.`, () =>
+          bringBack
+            .mutateAsync({ kind: 'farm', id: doomed.id })
+            .catch((error: unknown) => showRefusal(`${doomed.name} stays in the bin`, error)),
+        );
+        onDone();
+      })
+      .catch(setProblem);
 
   return (
     <form onSubmit={onSubmit} noValidate className={classes.form}>
@@ -153,7 +150,7 @@ export function FarmForm({ farm, onDone }: { farm: Farm | null; onDone: () => vo
         onChange={(event) => draft.set({ ...values, notes: event.currentTarget.value })}
         error={messages.notes}
       />
-      <DraftNote {...draft} onDrop={() => draft.clear(valuesOf(farm))} />
+      <DraftNote {...draft} onDrop={draft.clear} />
       <div className={classes.foot}>
         <Group gap="xs">
           <Button type="submit" loading={saving}>
@@ -164,7 +161,12 @@ export function FarmForm({ farm, onDone }: { farm: Farm | null; onDone: () => vo
           </Button>
         </Group>
         {farm && (
-          <Button variant="subtle" color="danger" onClick={() => askRemoval(farm)}>
+          <Button
+            variant="subtle"
+            color="danger"
+            loading={remove.isPending}
+            onClick={() => void putAway(farm)}
+          >
             Remove
           </Button>
         )}

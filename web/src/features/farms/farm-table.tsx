@@ -12,7 +12,8 @@ export function FarmTable({
   onEdit,
 }: {
   farms: readonly Farm[];
-  onEdit: (id: string) => void;
+  /** Absent for those who may not change farms. */
+  onEdit?: (id: string) => void;
 }) {
   const columns = useMemo<Column<Farm>[]>(
     () => [
@@ -64,18 +65,19 @@ export function FarmTable({
         head: 'Change',
         headHidden: true,
         numeric: true,
-        cell: (farm) => (
-          <Tooltip label="Change">
-            <ActionIcon
-              variant="subtle"
-              color="ink"
-              aria-label={`Change ${farm.name}`}
-              onClick={() => onEdit(farm.id)}
-            >
-              <IconPencil size={17} stroke={1.6} />
-            </ActionIcon>
-          </Tooltip>
-        ),
+        cell: (farm) =>
+          onEdit && (
+            <Tooltip label="Change">
+              <ActionIcon
+                variant="subtle"
+                color="ink"
+                aria-label={`Change ${farm.name}`}
+                onClick={() => onEdit(farm.id)}
+              >
+                <IconPencil size={17} stroke={1.6} />
+              </ActionIcon>
+            </Tooltip>
+          ),
       },
     ],
     [onEdit],

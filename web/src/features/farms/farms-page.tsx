@@ -7,7 +7,8 @@ import { useSearchParams } from 'react-router-dom';
 import { EmptyState } from '../../components/empty-state';
 import { ErrorPanel } from '../../components/error-panel';
 import { PageHead } from '../../components/page-head';
-import { hectares } from '../../lib/format';
+import { countOf, hectares } from '../../lib/format';
+import { useMay } from '../../lib/use-may';
 import { farmListQuery } from '../../queries/farms';
 import { FarmDrawer } from './farm-drawer';
 import { FarmTable } from './farm-table';
@@ -24,6 +25,7 @@ function matching(farms: readonly Farm[], query: string): Farm[] {
 export function FarmsPage() {
   const [search, setSearch] = useSearchParams();
   const farms = useQuery(farmListQuery);
+  const mayWrite = useMay('farms:write');
   const query = search.get('q') ?? '';
   const shown = useMemo(() => matching(farms.data ?? [], query), [farms.data, query]);
   const editing = farms.data?.find((farm) => farm.id === search.get('edit'));
@@ -47,14 +49,16 @@ export function FarmsPage() {
       <PageHead
         title="Farms"
         actions={
-          <Button leftSection={<IconPlus size={16} />} onClick={() => change('add', '1')}>
-            Add a farm
-          </Button>
+          mayWrite && (
+            <Button leftSection={<IconPlus size={16} />} onClick={() => change('add', '1')}>
+              Add a farm
+            </Button>
+          )
         }
       >
         {farms.data && farms.data.length > 0 && (
           <span className="tabular">
-            {shown.length} farms, {hectares(total)} of fields with a boundary
+            {countOf(shown.length, 'farm')}, {hectares(total)} of fields with a boundary
           </span>
         )}
       </PageHead>
@@ -63,7 +67,9 @@ export function FarmsPage() {
       {farms.data?.length === 0 && (
         <EmptyState
           title="No farm is recorded yet"
-          action={<Button onClick={() => change('add', '1')}>Add the first farm</Button>}
+          action={
+            mayWrite && <Button onClick={() => change('add', '1')}>Add the first farm</Button>
+          }
         >
           A farm holds its fields together and names who farms them. Letters and review pages speak
           to that person.
@@ -81,7 +87,7 @@ export function FarmsPage() {
             onChange={(event) => change('q', event.currentTarget.value)}
           />
           {shown.length > 0 ? (
-            <FarmTable farms={shown} onEdit={(id) => change('edit', id)} />
+            <FarmTable farms={shown} onEdit={mayWrite ? (id) => change('edit', id) : undefined} />
           ) : (
             <p>
               No farm answers to “{query}”.{' '}
@@ -94,7 +100,7 @@ export function FarmsPage() {
       )}
       <FarmDrawer
         key={editing?.id ?? 'new'}
-        opened={adding || editing !== undefined}
+        opened={mayWrite && (adding || editing !== undefined)}
         farm={editing ?? null}
         onClose={() => change('add', null)}
       />

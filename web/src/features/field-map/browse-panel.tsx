@@ -21,23 +21,27 @@ interface Props {
   onQuery: (text: string) => void;
   onSelect: (id: string | null) => void;
   onOpen: (id: string) => void;
-  onAdd: (mode: AddMode) => void;
+  /** Absent for those who may not add fields. */
+  onAdd?: (mode: AddMode) => void;
 }
 
 export function BrowsePanel(props: Props) {
   const { fields, selectedId } = props;
+  const { onAdd } = props;
   const selected = fields.find((field) => field.id === selectedId);
   if (props.none) {
     return (
       <EmptyState
         title="No field is recorded yet"
         action={
-          <Group gap="xs">
-            <Button onClick={() => props.onAdd('draw')}>Draw a field</Button>
-            <Button variant="default" onClick={() => props.onAdd('import')}>
-              Import boundaries
-            </Button>
-          </Group>
+          onAdd && (
+            <Group gap="xs">
+              <Button onClick={() => onAdd('draw')}>Draw a field</Button>
+              <Button variant="default" onClick={() => onAdd('import')}>
+                Import boundaries
+              </Button>
+            </Group>
+          )
         }
       >
         A field needs a name and a boundary. Draw it on the map, type its corners or side lengths,

@@ -5,7 +5,8 @@ import { Button, Skeleton } from '@mantine/core';
 import { IconPlus } from '@tabler/icons-react';
 import { ErrorPanel } from '../../components/error-panel';
 import { PageHead } from '../../components/page-head';
-import { hectares } from '../../lib/format';
+import { countOf, hectares } from '../../lib/format';
+import { useMay } from '../../lib/use-may';
 import { farmListQuery } from '../../queries/farms';
 import { fieldListQuery } from '../../queries/fields';
 import { AddPanel } from './add/add-panel';
@@ -26,7 +27,7 @@ export function FieldsPage() {
   const navigate = useNavigate();
   const fields = useQuery(fieldListQuery());
   const farms = useQuery(farmListQuery);
-  const editor = useBoundaryEditor('boundary:new', EMPTY);
+  const editor = useBoundaryEditor('boundary:new', EMPTY, 0);
   const [importing, setImporting] = useState<ReadPolygon[]>([]);
   const [pin, setPin] = useState<[number, number] | null>(null);
 
@@ -34,7 +35,8 @@ export function FieldsPage() {
   const query = search.get('q') ?? '';
   const selectedId = search.get('field');
   const add = search.get('add');
-  const mode = isAddMode(add) ? add : null;
+  const mayWrite = useMay('fields:write');
+  const mode = mayWrite && isAddMode(add) ? add : null;
   const all = fields.data ?? NONE;
   const shown = useMemo(() => fieldsMatching(all, query, farmId), [all, query, farmId]);
   const farm = farms.data?.find(({ id }) => id === farmId);
@@ -68,7 +70,8 @@ export function FieldsPage() {
               : []
         }
         actions={
-          !mode && (
+          !mode &&
+          mayWrite && (
             <Button
               leftSection={<IconPlus size={16} />}
               onClick={() => change({ add: 'draw', field: null })}
@@ -80,7 +83,7 @@ export function FieldsPage() {
       >
         {!mode && fields.data && (
           <span className="tabular">
-            {shown.length} {shown.length === 1 ? 'field' : 'fields'}, {hectares(total)}
+            {countOf(shown.length, 'field')}, {hectares(total)}
           </span>
         )}
       </PageHead>
@@ -113,7 +116,7 @@ export function FieldsPage() {
               onQuery={(text) => change({ q: text })}
               onSelect={(id) => change({ field: id })}
               onOpen={(id) => void navigate(`/fields/${id}`)}
-              onAdd={(next) => change({ add: next })}
+              onAdd={mayWrite ? (next) => change({ add: next }) : undefined}
             />
           )}
         </div>

@@ -2,11 +2,14 @@ import type { Field } from '@furrowlight/shared/contract/fields';
 import { Button, Group } from '@mantine/core';
 import { Link } from 'react-router-dom';
 import { bearing, hectares, withUnit } from '../../lib/format';
+import { useMay } from '../../lib/use-may';
 import classes from './browse-panel.module.css';
 
 /** The chosen field in three facts and the next step. */
 export function SelectedField({ field }: { field: Field }) {
   const { geometry } = field;
+  const mayDraw = useMay('fields:write');
+  const mayLay = useMay('scenarios:write');
   return (
     <section className={classes.card} aria-label={`Chosen: ${field.name}`}>
       <h2>{field.name}</h2>
@@ -19,7 +22,7 @@ export function SelectedField({ field }: { field: Field }) {
         <Button component={Link} to={`/fields/${field.id}`} size="sm">
           Open the field
         </Button>
-        {geometry ? (
+        {geometry && mayLay && (
           <Button
             component={Link}
             to={`/fields/${field.id}/scenarios/new`}
@@ -28,7 +31,8 @@ export function SelectedField({ field }: { field: Field }) {
           >
             Lay rows
           </Button>
-        ) : (
+        )}
+        {!geometry && mayDraw && (
           <Button
             component={Link}
             to={`/fields/${field.id}?edit=boundary`}

@@ -1,8 +1,10 @@
+import type { Session } from '@furrowlight/shared/contract/session';
 import { Modal, VisuallyHidden } from '@mantine/core';
 import { useDebouncedValue } from '@mantine/hooks';
 import { useQueries, useQuery } from '@tanstack/react-query';
 import { useId, useMemo, useState, type KeyboardEvent } from 'react';
 import { useNavigate } from 'react-router-dom';
+import { mayDo } from '../../../lib/use-may';
 import { farmListQuery } from '../../../queries/farms';
 import { fieldListQuery } from '../../../queries/fields';
 import { scenarioListQuery } from '../../../queries/scenarios';
@@ -13,26 +15,26 @@ import { entriesFor, matches, scenarioEntry, type Entry } from './entries';
 interface Props {
   opened: boolean;
   onClose: () => void;
-  memberId: string;
+  session: Session;
 }
 
 /** Ctrl+K: every field, scenario, farm and action by its name. */
-export function CommandPalette({ opened, onClose, memberId }: Props) {
+export function CommandPalette({ opened, onClose, session }: Props) {
   return (
     <Modal.Root opened={opened} onClose={onClose} size="lg" padding={0} yOffset="12vh">
       <Modal.Overlay />
       <Modal.Content aria-label="Find or do">
         <Modal.Body>
-          <PaletteBody onClose={onClose} memberId={memberId} />
+          <PaletteBody onClose={onClose} session={session} />
         </Modal.Body>
       </Modal.Content>
     </Modal.Root>
   );
 }
 
-function useEntries(query: string, memberId: string): Entry[] {
+function useEntries(query: string, session: Session): Entry[] {
   const [settled] = useDebouncedValue(query, 150);
-  const recent = useRecent(memberId);
+  const recent = useRecent(session.memberId);
   const fields = useQuery(fieldListQuery());
   const farms = useQuery(farmListQuery);
   const near = useMemo(
@@ -60,15 +62,16 @@ function useEntries(query: string, memberId: string): Entry[] {
     farms: farms.data ?? [],
     scenarios: found,
     recent,
+    may: (permission) => mayDo(session, permission),
   });
 }
 
-function PaletteBody({ onClose, memberId }: Omit<Props, 'opened'>) {
+function PaletteBody({ onClose, session }: Omit<Props, 'opened'>) {
   const [query, setQuery] = useState('');
   const [at, setAt] = useState(0);
   const navigate = useNavigate();
   const listId = useId();
-  const entries = useEntries(query, memberId);
+  const entries = useEntries(query, session);
   const active = Math.min(at, Math.max(0, entries.length - 1));
 
   const go = (entry: Entry | undefined) => {

@@ -1,3 +1,4 @@
+import type { MemberPermission } from '@furrowlight/shared/access/permissions';
 import type { Farm } from '@furrowlight/shared/contract/farms';
 import type { Field } from '@furrowlight/shared/contract/fields';
 import type { Scenario } from '@furrowlight/shared/contract/scenarios';
@@ -10,6 +11,8 @@ export interface Entry {
   label: string;
   under?: string;
   to: string;
+  /** Offered only to those who hold it. */
+  needs?: MemberPermission;
 }
 
 const fold = (text: string) =>
@@ -34,6 +37,7 @@ const DO: readonly Entry[] = [
     label: 'Add a field',
     under: 'draw, pin, type or import',
     to: '/fields?add=draw',
+    needs: 'fields:write',
   },
   {
     id: 'do-import',
@@ -41,9 +45,16 @@ const DO: readonly Entry[] = [
     label: 'Import boundaries',
     under: 'GeoJSON',
     to: '/fields?add=import',
+    needs: 'fields:write',
   },
-  { id: 'do-farm', group: 'Do', label: 'Add a farm', to: '/farms?add=1' },
-  { id: 'do-weather', group: 'Do', label: 'Add a weather year', to: '/weather' },
+  { id: 'do-farm', group: 'Do', label: 'Add a farm', to: '/farms?add=1', needs: 'farms:write' },
+  {
+    id: 'do-weather',
+    group: 'Do',
+    label: 'Add a weather year',
+    to: '/weather',
+    needs: 'weather:write',
+  },
 ];
 
 export function fieldEntry(field: Field): Entry {
@@ -72,23 +83,23 @@ interface Sources {
   farms: readonly Farm[];
   scenarios: readonly Entry[];
   recent: readonly Recent[];
+  may: (permission: MemberPermission) => boolean;
 }
 
 /** What the palette offers for a query, best group first; an empty query shows the usual steps. */
 export function entriesFor(query: string, sources: Sources): Entry[] {
-  const pages: Entry[] = [...NAV, ...NAV_MORE].map(({ to, label }) => ({
-    id: `go-${to}`,
-    group: 'Go to',
-    label,
-    to,
-  }));
+  const allowed = ({ needs }: { needs?: MemberPermission }) => !needs || sources.may(needs);
+  const acts = DO.filter(allowed);
+  const pages = [...NAV, ...NAV_MORE]
+    .filter(allowed)
+    .map(({ to, label }): Entry => ({ id: `go-${to}`, group: 'Go to', label, to }));
   if (query.trim() === '') {
     const lately: Entry[] = sources.recent.map((place) => ({
       id: `recent-${place.to}`,
       group: 'Lately',
       ...place,
     }));
-    return [...lately, ...DO, ...pages];
+    return [...lately, ...acts, ...pages];
   }
   const keep = (entry: Entry) => matches(query, `${entry.label} ${entry.under ?? ''}`);
   return [
@@ -104,7 +115,7 @@ export function entriesFor(query: string, sources: Sources): Entry[] {
       }))
       .filter(keep)
       .slice(0, 5),
-    ...DO.filter(keep),
+    ...acts.filter(keep),
     ...pages.filter(keep),
   ];
 }

@@ -5,7 +5,7 @@ import { DrawTools } from '../boundary/draw-tools';
 import { CornerTable } from '../boundary/corner-table';
 import { NextSide } from '../boundary/next-side';
 import { ShapeFigures } from '../boundary/shape-figures';
-import { boundaryOf, EMPTY, openRing } from '../boundary/shape';
+import { boundaryOf, openRing } from '../boundary/shape';
 import type { BoundaryEditor } from '../boundary/use-boundary-editor';
 import { ImportPanel } from '../import/import-panel';
 import type { ReadPolygon } from '../import/parse-geojson';
@@ -40,7 +40,7 @@ export function AddPanel(props: Props) {
   const { mode, editor, pin } = props;
   const boundary = boundaryOf(editor.shape);
   const finish = () => {
-    editor.restart(EMPTY);
+    editor.restart();
     props.onPin(null);
     props.onClose();
   };
@@ -72,7 +72,7 @@ export function AddPanel(props: Props) {
             editor.shape.rings.map((_, ring) => (
               <CornerTable key={ring} editor={editor} ring={ring} />
             ))}
-          <DraftNote {...editor.draft} onDrop={() => editor.restart(EMPTY)} />
+          <DraftNote {...editor.draft} onDrop={editor.restart} />
         </>
       )}
       {mode === 'pin' && <PinForm pin={pin} onPin={props.onPin} />}

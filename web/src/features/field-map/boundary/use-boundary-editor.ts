@@ -1,7 +1,7 @@
 import { useHotkeys } from '@mantine/hooks';
 import { useCallback, useMemo, useState } from 'react';
-import { useDraft } from '../../../lib/use-draft';
-import { redo, startHistory, step, undo } from './history';
+import { useBasedDraft, type Base } from '../../../lib/use-based-draft';
+import { redo, startHistory, step, undo, type History } from './history';
 import { closeRing, openRing, type CornerRef, type Shape } from './shape';
 
 export interface BoundaryEditor {
@@ -25,18 +25,23 @@ export interface BoundaryEditor {
   activate: (corner: CornerRef | null) => void;
   undo: () => void;
   redo: () => void;
-  /** Forget all steps and the draft on this device. */
-  restart: (from: Shape) => void;
+  /** The saved shape this work was begun from, and its row's version. */
+  base: Base<Shape>;
+  /** Forget all steps and the draft on this device, and go back to the saved shape. */
+  restart: () => void;
 }
 
 /**
  * A boundary with its steps back and forth, kept as a draft on this device.
  *
  * @param key names the draft, e.g. `boundary:new`
+ * @param saved the shape as the server has it; a stable object while it does not change
+ * @param version version of its row
  */
-export function useBoundaryEditor(key: string, initial: Shape): BoundaryEditor {
-  const { value, set, clear, savedAt, restored } = useDraft(key, initial);
-  const [history, setHistory] = useState(() => startHistory(value));
+export function useBoundaryEditor(key: string, saved: Shape, version: number): BoundaryEditor {
+  const { value, base, set, clear, savedAt, restored } = useBasedDraft(key, saved, version);
+  const [steps, setSteps] = useState<History<Shape> | null>(null);
+  const history = useMemo(() => steps ?? startHistory(value), [steps, value]);
   const [preview, setPreview] = useState<Shape | null>(null);
   const [active, activate] = useState<CornerRef | null>(null);
   const [cutting, cut] = useState(false);
@@ -44,7 +49,7 @@ export function useBoundaryEditor(key: string, initial: Shape): BoundaryEditor {
   const move = useCallback(
     (next: typeof history) => {
       if (next === history) return;
-      setHistory(next);
+      setSteps(next);
       setPreview(null);
       set(next.present);
     },
@@ -78,14 +83,15 @@ export function useBoundaryEditor(key: string, initial: Shape): BoundaryEditor {
       activate,
       undo: back,
       redo: forth,
-      restart: (from) => {
-        setHistory(startHistory(from));
+      base,
+      restart: () => {
+        setSteps(null);
         setPreview(null);
         activate(null);
         cut(false);
-        clear(from);
+        clear();
       },
     }),
-    [history, preview, active, cutting, savedAt, restored, move, back, forth, clear],
+    [history, preview, active, cutting, savedAt, restored, base, move, back, forth, clear],
   );
 }

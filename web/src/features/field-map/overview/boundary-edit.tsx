@@ -8,7 +8,7 @@ import { CornerTable } from '../boundary/corner-table';
 import { DrawTools } from '../boundary/draw-tools';
 import { NextSide } from '../boundary/next-side';
 import { ShapeFigures } from '../boundary/shape-figures';
-import { boundaryOf, shapeOf } from '../boundary/shape';
+import { boundaryOf } from '../boundary/shape';
 import type { BoundaryEditor } from '../boundary/use-boundary-editor';
 import classes from './overview.module.css';
 import { SaveAnswers } from './save-answers';
@@ -26,12 +26,15 @@ export function BoundaryEdit({ field, editor, onDone }: Props) {
   const write = useFieldSave(field);
   const boundary = boundaryOf(editor.shape);
   const saved = () => {
-    editor.restart(editor.shape);
+    editor.restart();
     notifications.show({ message: `The boundary of ${field.name} is saved.` });
     onDone();
   };
   const save = async () => {
-    if (boundary && (await write.save({ boundary, pin: middleOf(boundary) }))) saved();
+    if (!boundary) return;
+    const { value, version } = editor.base;
+    const base = { value: { boundary: boundaryOf(value), pin: field.pin }, version };
+    if (await write.save({ boundary, pin: middleOf(boundary) }, base)) saved();
   };
   return (
     <div className={classes.editor}>
@@ -51,15 +54,11 @@ export function BoundaryEdit({ field, editor, onDone }: Props) {
       {view === 'numbers' &&
         editor.shape.rings.map((_, ring) => <CornerTable key={ring} editor={editor} ring={ring} />)}
       {Object.values(write.messages).map((message) => (
-        <p key={message} role="alert" className={classes.hint}>
+        <p key={message} role="alert" className={classes.refusal}>
           {message}
         </p>
       ))}
-      <SaveAnswers
-        write={write}
-        onTheirs={() => editor.restart(shapeOf(field.boundary))}
-        onSaved={saved}
-      />
+      <SaveAnswers write={write} onTheirs={editor.restart} onSaved={saved} />
       <Group gap="xs">
         <Button disabled={!boundary} loading={write.saving} onClick={() => void save()}>
           Save the boundary
@@ -67,14 +66,14 @@ export function BoundaryEdit({ field, editor, onDone }: Props) {
         <Button
           variant="subtle"
           onClick={() => {
-            editor.restart(shapeOf(field.boundary));
+            editor.restart();
             onDone();
           }}
         >
           Cancel
         </Button>
       </Group>
-      <DraftNote {...editor.draft} onDrop={() => editor.restart(shapeOf(field.boundary))} />
+      <DraftNote {...editor.draft} onDrop={editor.restart} />
       <p className={classes.hint}>
         A scenario with a result keeps the boundary it was worked out with.
       </p>

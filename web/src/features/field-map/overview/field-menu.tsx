@@ -1,13 +1,14 @@
 import type { Field } from '@furrowlight/shared/contract/fields';
 import { ActionIcon, Menu } from '@mantine/core';
-import { modals } from '@mantine/modals';
-import { notifications } from '@mantine/notifications';
 import { IconDots, IconFileExport, IconTrash } from '@tabler/icons-react';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
-import { ApiProblem } from '../../../lib/api';
+import { showUndo } from '../../../components/undo-notice';
 import { saveText } from '../../../lib/save-text';
 import { forgetRecent } from '../../../lib/recent';
+import { showRefusal } from '../../../lib/show-refusal';
+import { useMay } from '../../../lib/use-may';
+import { restore } from '../../../queries/bin';
 import { removeField } from '../../../queries/fields';
 
 function asGeoJson(field: Field): string {
@@ -31,33 +32,23 @@ function asGeoJson(field: Field): string {
 export function FieldMenu({ field, memberId }: { field: Field; memberId: string }) {
   const client = useQueryClient();
   const navigate = useNavigate();
+  const mayWrite = useMay('fields:write');
   const remove = useMutation(removeField(client));
-  const ask = () =>
-    modals.openConfirmModal({
-      title: `Remove ${field.name}?`,
-      children:
-        field.scenarioCount + field.seasonCount > 0
-          ? `Its ${field.seasonCount} seasons and ${field.scenarioCount} scenarios with their results go with it. This cannot be undone.`
-          : 'This cannot be undone.',
-      labels: { confirm: 'Remove the field', cancel: 'Keep it' },
-      confirmProps: { color: 'danger' },
-      onConfirm: () => {
-        remove
-          .mutateAsync({ id: field.id, version: field.version })
-          .then(() => {
-            forgetRecent(memberId, `/fields/${field.id}`);
-            notifications.show({ message: `${field.name} is removed.` });
-            return navigate('/fields');
-          })
-          .catch((error: unknown) =>
-            notifications.show({
-              color: 'danger',
-              title: 'The field stays',
-              message: error instanceof ApiProblem ? error.detail : 'It could not be removed.',
-            }),
-          );
-      },
-    });
+  const bringBack = useMutation(restore(client));
+  const undo = () =>
+    bringBack
+      .mutateAsync({ kind: 'field', id: field.id })
+      .then(() => navigate(`/fields/${field.id}`))
+      .catch((error: unknown) => showRefusal(`${field.name} stays in the bin`, error));
+  const putAway = () =>
+    remove
+      .mutateAsync({ id: field.id, version: field.version })
+      .then(() => {
+        forgetRecent(memberId, `/fields/${field.id}`);
+        showUndo(`${field.name} is in the bin for 30 days.`, () => void undo());
+        return navigate('/fields');
+      })
+      .catch((error: unknown) => showRefusal(`${field.name} stays`, error));
   return (
     <Menu position="bottom-end" shadow="md" width={220}>
       <Menu.Target>
@@ -74,9 +65,15 @@ export function FieldMenu({ field, memberId }: { field: Field; memberId: string 
         >
           Save as GeoJSON
         </Menu.Item>
-        <Menu.Item color="danger" leftSection={<IconTrash size={16} stroke={1.6} />} onClick={ask}>
-          Remove the field
-        </Menu.Item>
+        {mayWrite && (
+          <Menu.Item
+            color="danger"
+            leftSection={<IconTrash size={16} stroke={1.6} />}
+            onClick={() => void putAway()}
+          >
+            Put into the bin
+          </Menu.Item>
+        )}
       </Menu.Dropdown>
     </Menu>
   );

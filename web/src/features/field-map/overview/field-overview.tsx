@@ -2,9 +2,10 @@ import type { Field } from '@furrowlight/shared/contract/fields';
 import { Button, Skeleton } from '@mantine/core';
 import { IconPolygon } from '@tabler/icons-react';
 import { useQuery } from '@tanstack/react-query';
-import { lazy, Suspense, useEffect, useRef, type ReactNode } from 'react';
+import { lazy, Suspense, useEffect, useMemo, useRef, type ReactNode } from 'react';
 import { useLocation, useSearchParams } from 'react-router-dom';
 import { Section } from '../../../components/section';
+import { useMay } from '../../../lib/use-may';
 import { fieldListQuery } from '../../../queries/fields';
 import { scenarioListQuery } from '../../../queries/scenarios';
 import { seasonListQuery } from '../../../queries/seasons';
@@ -41,10 +42,12 @@ export function FieldOverview({ field, reviews }: Props) {
         ? 2000
         : false,
   });
-  const editor = useBoundaryEditor(`boundary:${field.id}`, shapeOf(field.boundary));
+  const savedShape = useMemo(() => shapeOf(field.boundary), [field.boundary]);
+  const editor = useBoundaryEditor(`boundary:${field.id}`, savedShape, field.version);
   const drawing = useOccluderDrawing();
   const top = useRef<HTMLDivElement>(null);
-  const editing = search.get('edit') === 'boundary';
+  const mayWrite = useMay('fields:write');
+  const editing = mayWrite && search.get('edit') === 'boundary';
   const tapping = drawing.line !== null;
   const ready = seasons.isSuccess && scenarios.isSuccess;
 
@@ -77,7 +80,7 @@ export function FieldOverview({ field, reviews }: Props) {
               drawing={drawing}
             />
           </Suspense>
-          {!editing && (
+          {!editing && mayWrite && (
             <div className={classes.mapTools}>
               <Button
                 variant="default"
@@ -94,7 +97,7 @@ export function FieldOverview({ field, reviews }: Props) {
         ) : (
           <FieldFacts
             field={field}
-            step={ready ? nextStep(field, seasons.data.length, scenarios.data) : null}
+            step={ready && mayWrite ? nextStep(field, seasons.data.length, scenarios.data) : null}
           />
         )}
       </div>

@@ -5,6 +5,7 @@ import { useState } from 'react';
 import { NumberField } from '../../../components/number-field';
 import { Section } from '../../../components/section';
 import { withUnit } from '../../../lib/format';
+import { useMay } from '../../../lib/use-may';
 import { sideBetween } from '../boundary/measure';
 import classes from './overview.module.css';
 import { OCCLUDER_KINDS } from './occluder-kinds';
@@ -18,18 +19,23 @@ const lengthOf = ({ line }: Occluder) =>
 /** Hedges, woods and buildings that take light from the field. */
 export function OccludersSection({ field, drawing }: { field: Field; drawing: OccluderDrawing }) {
   const write = useFieldSave(field);
+  const mayWrite = useMay('fields:write');
   const [kind, setKind] = useState<Occluder['kind']>('hedge');
   const [heightM, setHeight] = useState<number | null>(4);
   const { line } = drawing;
+  const base = { value: field, version: field.version };
   const heightWrong = heightM === null || heightM < 0.2 || heightM > 60;
 
   const add = async () => {
     if (!line || line.length < 2 || heightWrong) return;
-    const saved = await write.save({ occluders: [...field.occluders, { kind, heightM, line }] });
+    const saved = await write.save(
+      { occluders: [...field.occluders, { kind, heightM, line }] },
+      base,
+    );
     if (saved) drawing.stop();
   };
   const remove = (index: number) =>
-    void write.save({ occluders: field.occluders.filter((_, i) => i !== index) });
+    void write.save({ occluders: field.occluders.filter((_, i) => i !== index) }, base);
 
   return (
     <Section
@@ -40,6 +46,7 @@ export function OccludersSection({ field, drawing }: { field: Field; drawing: Oc
           : undefined
       }
       actions={
+        mayWrite &&
         !line && (
           <Button variant="default" leftSection={<IconPlus size={16} />} onClick={drawing.start}>
             Add one
@@ -49,7 +56,7 @@ export function OccludersSection({ field, drawing }: { field: Field; drawing: Oc
     >
       <SaveAnswers write={write} onTheirs={drawing.stop} onSaved={drawing.stop} />
       {Object.values(write.messages).map((message) => (
-        <p key={message} role="alert" className={classes.hint}>
+        <p key={message} role="alert" className={classes.refusal}>
           {message}
         </p>
       ))}
@@ -62,16 +69,18 @@ export function OccludersSection({ field, drawing }: { field: Field; drawing: Oc
                 {withUnit(occluder.heightM, 'm', 1)} high, {withUnit(lengthOf(occluder), 'm')} long
               </small>
             </div>
-            <ActionIcon
-              variant="subtle"
-              color="ink"
-              size="lg"
-              aria-label={`Remove ${OCCLUDER_KINDS[occluder.kind]} ${i + 1}`}
-              disabled={write.saving}
-              onClick={() => remove(i)}
-            >
-              <IconTrash size={17} stroke={1.6} />
-            </ActionIcon>
+            {mayWrite && (
+              <ActionIcon
+                variant="subtle"
+                color="ink"
+                size="lg"
+                aria-label={`Remove ${OCCLUDER_KINDS[occluder.kind]} ${i + 1}`}
+                disabled={write.saving}
+                onClick={() => remove(i)}
+              >
+                <IconTrash size={17} stroke={1.6} />
+              </ActionIcon>
+            )}
           </li>
         ))}
       </ul>

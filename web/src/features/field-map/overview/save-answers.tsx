@@ -16,7 +16,10 @@ export function SaveAnswers({ write, onTheirs, onSaved }: Props) {
       <ConflictPanel
         what="this field"
         busy={write.saving}
-        onTheirs={() => void conflict.takeTheirs().then(onTheirs)}
+        onTheirs={() => {
+          conflict.takeTheirs();
+          onTheirs();
+        }}
         onMine={() => void conflict.keepMine().then((ok) => ok && onSaved())}
       />
     );

@@ -13,6 +13,7 @@ import { useScenarioActions } from './use-scenario-actions';
 
 interface Props {
   scenario: Scenario;
+  mayChange: boolean;
   chosen: boolean;
   /** No further scenario fits into the comparison. */
   full: boolean;
@@ -20,7 +21,7 @@ interface Props {
 }
 
 /** One layout on this field: what it is, how far its light budget is, what to do with it. */
-export function ScenarioCard({ scenario, chosen, full, onChoose }: Props) {
+export function ScenarioCard({ scenario, mayChange, chosen, full, onChoose }: Props) {
   const [renaming, setRenaming] = useState(false);
   const actions = useScenarioActions(scenario);
   const here = `/fields/${scenario.fieldId}/scenarios/${scenario.id}`;
@@ -40,39 +41,41 @@ export function ScenarioCard({ scenario, chosen, full, onChoose }: Props) {
           </Link>
           <span className={classes.kind}>{LAYOUT_KINDS[scenario.layout.kind].name}</span>
         </div>
-        <Menu position="bottom-end" shadow="md" width={200}>
-          <Menu.Target>
-            <ActionIcon variant="subtle" color="ink" aria-label={`More for ${scenario.name}`}>
-              <IconDots size={18} stroke={1.6} />
-            </ActionIcon>
-          </Menu.Target>
-          <Menu.Dropdown>
-            <Menu.Item
-              leftSection={<IconCopy size={16} stroke={1.6} />}
-              onClick={() => void actions.copy()}
-            >
-              Copy
-            </Menu.Item>
-            <Menu.Item
-              leftSection={<IconPencil size={16} stroke={1.6} />}
-              onClick={() => setRenaming(true)}
-            >
-              Rename
-            </Menu.Item>
-            <Menu.Item
-              leftSection={
-                scenario.archived ? (
-                  <IconRestore size={16} stroke={1.6} />
-                ) : (
-                  <IconArchive size={16} stroke={1.6} />
-                )
-              }
-              onClick={() => void actions.archive(!scenario.archived)}
-            >
-              {scenario.archived ? 'Take back from archive' : 'Archive'}
-            </Menu.Item>
-          </Menu.Dropdown>
-        </Menu>
+        {mayChange && (
+          <Menu position="bottom-end" shadow="md" width={200}>
+            <Menu.Target>
+              <ActionIcon variant="subtle" color="ink" aria-label={`More for ${scenario.name}`}>
+                <IconDots size={18} stroke={1.6} />
+              </ActionIcon>
+            </Menu.Target>
+            <Menu.Dropdown>
+              <Menu.Item
+                leftSection={<IconCopy size={16} stroke={1.6} />}
+                onClick={() => void actions.copy()}
+              >
+                Copy
+              </Menu.Item>
+              <Menu.Item
+                leftSection={<IconPencil size={16} stroke={1.6} />}
+                onClick={() => setRenaming(true)}
+              >
+                Rename
+              </Menu.Item>
+              <Menu.Item
+                leftSection={
+                  scenario.archived ? (
+                    <IconRestore size={16} stroke={1.6} />
+                  ) : (
+                    <IconArchive size={16} stroke={1.6} />
+                  )
+                }
+                onClick={() => void actions.archive(!scenario.archived)}
+              >
+                {scenario.archived ? 'Take back from archive' : 'Archive'}
+              </Menu.Item>
+            </Menu.Dropdown>
+          </Menu>
+        )}
       </div>
       <dl className={classes.figures}>
         <div>

@@ -7,6 +7,7 @@ import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { ErrorPanel } from '../../../components/error-panel';
 import { Section } from '../../../components/section';
+import { useMay } from '../../../lib/use-may';
 import { ScenarioCard } from './scenario-card';
 import classes from './scenarios.module.css';
 
@@ -21,6 +22,7 @@ interface Props {
 export function ScenariosSection({ field, scenarios }: Props) {
   const [chosen, setChosen] = useState<readonly string[]>([]);
   const [withArchived, setWithArchived] = useState(false);
+  const mayWrite = useMay('scenarios:write');
   const all = scenarios.data ?? [];
   const archived = all.filter((scenario) => scenario.archived).length;
   const shown = all.filter((scenario) => withArchived || !scenario.archived);
@@ -46,7 +48,7 @@ export function ScenariosSection({ field, scenarios }: Props) {
               onChange={(event) => setWithArchived(event.currentTarget.checked)}
             />
           )}
-          {field.boundary && (
+          {field.boundary && mayWrite && (
             <Button
               component={Link}
               to={`/fields/${field.id}/scenarios/new`}
@@ -76,6 +78,7 @@ export function ScenariosSection({ field, scenarios }: Props) {
             <ScenarioCard
               key={scenario.id}
               scenario={scenario}
+              mayChange={mayWrite}
               chosen={chosen.includes(scenario.id)}
               full={chosen.length >= MOST}
               onChoose={() => toggle(scenario.id)}

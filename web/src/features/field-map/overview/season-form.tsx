@@ -9,7 +9,7 @@ import { ErrorSummary } from '../../../components/error-summary';
 import { NumberField } from '../../../components/number-field';
 import { ApiProblem, newIdempotencyKey } from '../../../lib/api';
 import { fieldMessages } from '../../../lib/field-messages';
-import { useDraft } from '../../../lib/use-draft';
+import { useBasedDraft } from '../../../lib/use-based-draft';
 import { cropListQuery } from '../../../queries/crops';
 import { changeSeason, createSeason } from '../../../queries/seasons';
 import classes from './overview.module.css';
@@ -55,7 +55,12 @@ export function SeasonForm({ fieldId, season, onDone }: Props) {
   const create = useMutation(createSeason(client, fieldId));
   const change = useMutation(changeSeason(client, fieldId));
   const [key] = useState(newIdempotencyKey);
-  const draft = useDraft(`season:${fieldId}:${season?.id ?? 'new'}`, valuesOf(season));
+  const current = useMemo(() => valuesOf(season), [season]);
+  const draft = useBasedDraft(
+    `season:${fieldId}:${season?.id ?? 'new'}`,
+    current,
+    season?.version ?? 0,
+  );
   const [messages, setMessages] = useState<Record<string, string>>({});
   const [problem, setProblem] = useState<unknown>(null);
   const values = draft.value;
@@ -90,9 +95,9 @@ export function SeasonForm({ fieldId, season, onDone }: Props) {
     const input = SeasonInput.parse(values);
     try {
       if (season)
-        await change.mutateAsync({ id: season.id, version: season.version, patch: input });
+        await change.mutateAsync({ id: season.id, version: draft.base.version, patch: input });
       else await create.mutateAsync({ input, idempotencyKey: key });
-      draft.clear(valuesOf(null));
+      draft.clear();
       onDone();
     } catch (error) {
       if (error instanceof ApiProblem) setMessages(error.fieldErrors);

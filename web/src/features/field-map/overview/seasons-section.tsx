@@ -1,12 +1,13 @@
 import type { Field, FieldSeason } from '@furrowlight/shared/contract/fields';
 import { ActionIcon, Button, Drawer, Group, Skeleton } from '@mantine/core';
-import { notifications } from '@mantine/notifications';
 import { IconPencil, IconPlus, IconTrash } from '@tabler/icons-react';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { ErrorPanel } from '../../../components/error-panel';
 import { Section } from '../../../components/section';
+import { showUndo } from '../../../components/undo-notice';
 import { newIdempotencyKey } from '../../../lib/api';
 import { calendarDate, withUnit } from '../../../lib/format';
+import { useMay } from '../../../lib/use-may';
 import { createSeason, removeSeason, seasonListQuery } from '../../../queries/seasons';
 import classes from './overview.module.css';
 import { SeasonForm } from './season-form';
@@ -22,6 +23,7 @@ interface Props {
 /** What grows here and when: the rotation. */
 export function SeasonsSection({ field, open, onOpen }: Props) {
   const seasons = useQuery(seasonListQuery(field.id));
+  const mayWrite = useMay('fields:write');
   const list = [...(seasons.data ?? [])].sort((a, b) => a.sowing.localeCompare(b.sowing));
   const editing = list.find(({ id }) => id === open) ?? null;
   const today = new Date().toLocaleDateString('sv-SE', { timeZone: field.timeZone });
@@ -35,13 +37,15 @@ export function SeasonsSection({ field, open, onOpen }: Props) {
             : undefined
         }
         actions={
-          <Button
-            variant="default"
-            leftSection={<IconPlus size={16} />}
-            onClick={() => onOpen('new')}
-          >
-            Add a season
-          </Button>
+          mayWrite && (
+            <Button
+              variant="default"
+              leftSection={<IconPlus size={16} />}
+              onClick={() => onOpen('new')}
+            >
+              Add a season
+            </Button>
+          )
         }
       >
         {seasons.isPending && <Skeleton height={120} />}
@@ -51,12 +55,16 @@ export function SeasonsSection({ field, open, onOpen }: Props) {
         <SeasonRibbon seasons={list} today={today} />
         <ul className={classes.list}>
           {list.map((season) => (
-            <SeasonRow key={season.id} season={season} onChange={() => onOpen(season.id)} />
+            <SeasonRow
+              key={season.id}
+              season={season}
+              onChange={mayWrite ? () => onOpen(season.id) : undefined}
+            />
           ))}
         </ul>
       </Section>
       <Drawer
-        opened={open === 'new' || editing !== null}
+        opened={mayWrite && (open === 'new' || editing !== null)}
         onClose={() => onOpen(null)}
         position="right"
         title={editing ? editing.cropName : 'Add a season'}
@@ -73,33 +81,19 @@ export function SeasonsSection({ field, open, onOpen }: Props) {
   );
 }
 
-function SeasonRow({ season, onChange }: { season: FieldSeason; onChange: () => void }) {
+function SeasonRow({ season, onChange }: { season: FieldSeason; onChange?: () => void }) {
   const client = useQueryClient();
   const remove = useMutation(removeSeason(client, season.fieldId));
   const create = useMutation(createSeason(client, season.fieldId));
   const takeAway = async () => {
     await remove.mutateAsync({ id: season.id, version: season.version });
     const { cropId, sowing, harvest, canopyHeightM } = season;
-    const notice = notifications.show({
-      message: (
-        <Group justify="space-between" wrap="nowrap">
-          {season.cropName} is taken out of the rotation.
-          <Button
-            size="compact-sm"
-            variant="default"
-            onClick={() => {
-              create.mutate({
-                input: { cropId, sowing, harvest, canopyHeightM },
-                idempotencyKey: newIdempotencyKey(),
-              });
-              notifications.hide(notice);
-            }}
-          >
-            Undo
-          </Button>
-        </Group>
-      ),
-    });
+    showUndo(`${season.cropName} is taken out of the rotation.`, () =>
+      create.mutate({
+        input: { cropId, sowing, harvest, canopyHeightM },
+        idempotencyKey: newIdempotencyKey(),
+      }),
+    );
   };
   return (
     <li>
@@ -111,27 +105,29 @@ function SeasonRow({ season, onChange }: { season: FieldSeason; onChange: () => 
         </small>
         {remove.isError && <ErrorPanel error={remove.error} />}
       </div>
-      <Group gap={4}>
-        <ActionIcon
-          variant="subtle"
-          color="ink"
-          size="lg"
-          aria-label={`Change ${season.cropName}`}
-          onClick={onChange}
-        >
-          <IconPencil size={17} stroke={1.6} />
-        </ActionIcon>
-        <ActionIcon
-          variant="subtle"
-          color="ink"
-          size="lg"
-          aria-label={`Remove ${season.cropName}`}
-          loading={remove.isPending}
-          onClick={() => void takeAway().catch(() => undefined)}
-        >
-          <IconTrash size={17} stroke={1.6} />
-        </ActionIcon>
-      </Group>
+      {onChange && (
+        <Group gap={4}>
+          <ActionIcon
+            variant="subtle"
+            color="ink"
+            size="lg"
+            aria-label={`Change ${season.cropName}`}
+            onClick={onChange}
+          >
+            <IconPencil size={17} stroke={1.6} />
+          </ActionIcon>
+          <ActionIcon
+            variant="subtle"
+            color="ink"
+            size="lg"
+            aria-label={`Remove ${season.cropName}`}
+            loading={remove.isPending}
+            onClick={() => void takeAway().catch(() => undefined)}
+          >
+            <IconTrash size={17} stroke={1.6} />
+          </ActionIcon>
+        </Group>
+      )}
     </li>
   );
 }

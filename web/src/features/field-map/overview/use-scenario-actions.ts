@@ -1,8 +1,9 @@
 import type { Scenario, ScenarioPatch } from '@furrowlight/shared/contract/scenarios';
-import { Button, Group } from '@mantine/core';
 import { notifications } from '@mantine/notifications';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { ApiProblem, newIdempotencyKey } from '../../../lib/api';
+import { showUndo } from '../../../components/undo-notice';
+import { newIdempotencyKey } from '../../../lib/api';
+import { showRefusal } from '../../../lib/show-refusal';
 import { changeScenario, copyScenario } from '../../../queries/scenarios';
 
 /** Copy, rename and archive, each answered by a notice; archiving can be taken back. */
@@ -12,12 +13,7 @@ export function useScenarioActions(scenario: Scenario) {
   const duplicate = useMutation(copyScenario(client));
   const { id } = scenario;
 
-  const refused = (error: unknown) =>
-    notifications.show({
-      color: 'danger',
-      title: 'Nothing was changed',
-      message: error instanceof ApiProblem ? error.detail : 'Something went wrong. Try again.',
-    });
+  const refused = (error: unknown) => showRefusal('Nothing was changed', error);
   const write = async (patch: ScenarioPatch, version: number): Promise<Scenario | null> => {
     try {
       return await change.mutateAsync({ id, version, patch });
@@ -44,23 +40,10 @@ export function useScenarioActions(scenario: Scenario) {
     archive: async (archived: boolean) => {
       const written = await write({ archived }, scenario.version);
       if (!written || !archived) return;
-      const notice = notifications.show({
-        message: (
-          <Group justify="space-between" wrap="nowrap">
-            {scenario.name} is archived.
-            <Button
-              size="compact-sm"
-              variant="default"
-              onClick={() => {
-                notifications.hide(notice);
-                void write({ archived: false }, written.version);
-              }}
-            >
-              Undo
-            </Button>
-          </Group>
-        ),
-      });
+      showUndo(
+        `${scenario.name} is archived.`,
+        () => void write({ archived: false }, written.version),
+      );
     },
   };
 }
