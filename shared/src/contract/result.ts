@@ -103,6 +103,8 @@ export const CropBudget = z.object({
     z.object({ budget: PeriodBudget, weight: z.number(), critical: z.boolean(), note: z.string() }),
   ),
   yield: YieldRange,
+  /** Biomass by light use over that in open field, a second opinion; null without crop values. */
+  relativeBiomass: z.number().nullable().default(null),
   /** Reference evapotranspiration (FAO-56) over the season, mm; null without temperature. */
   et0OpenMm: z.number().nullable(),
   et0ShadedMm: z.number().nullable(),

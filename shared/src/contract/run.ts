@@ -26,6 +26,13 @@ export const CropStage = z.strictObject({
   note: z.string(),
 });
 
+/** What the light-use equation needs: g MJ-1 of PAR, extinction coefficient, largest leaf area. */
+export const CropLightUse = z.strictObject({
+  lightUseGPerMj: within('Light use', 0.1, 15, 'g/MJ'),
+  extinction: within('Extinction coefficient', 0.05, 2),
+  leafAreaMax: within('Largest leaf area', 0.1, 15),
+});
+
 export const RunCrop = z.strictObject({
   seasonId: z.string(),
   cropId: z.string(),
@@ -35,6 +42,8 @@ export const RunCrop = z.strictObject({
   firstDay: z.int().min(0).max(365),
   days: z.int().min(1).max(366),
   stages: z.array(CropStage).max(20),
+  /** Left out where the crop table has no such values. */
+  lightUse: CropLightUse.optional(),
 });
 export type RunCrop = z.infer<typeof RunCrop>;
 

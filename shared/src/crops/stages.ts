@@ -26,6 +26,12 @@ export function shareAtBbch(code: number): number {
   return STAGE_STARTS[stage] + ((code % 10) / 10) * (next - STAGE_STARTS[stage]);
 }
 
+/** A crop's light use, where the table has all three values. */
+function lightUseOf({ lightUseGPerMj, extinction, leafAreaMax }: Crop): Pick<RunCrop, 'lightUse'> {
+  if (lightUseGPerMj === null || extinction === null || leafAreaMax === null) return {};
+  return { lightUse: { lightUseGPerMj, extinction, leafAreaMax } };
+}
+
 /** A sown crop as a field's season holds it. */
 export interface SownCrop {
   seasonId: string;
@@ -57,6 +63,7 @@ export function runCropOf(crop: Crop, sown: SownCrop): RunCrop {
     canopyHeightM: sown.canopyHeightM,
     firstDay,
     days,
+    ...lightUseOf(crop),
   };
   const range = criticalRange(crop.criticalBbch);
   if (!range) return { ...base, stages: [] };

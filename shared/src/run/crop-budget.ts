@@ -1,6 +1,7 @@
 import type { CropBudget } from '../contract/result.js';
 import type { RunCrop } from '../contract/run.js';
 import { clearnessOf, referenceEvapotranspiration, windAt2m } from '../crops/evapotranspiration.js';
+import { seasonBiomass } from '../crops/light-use.js';
 import { yieldBand } from '../crops/response.js';
 import { periodBudget, type LightSums } from '../light/budget.js';
 import type { RunState } from './state.js';
@@ -55,6 +56,19 @@ function seasonWater(state: RunState, crop: RunCrop, sums: LightSums) {
   return { openMm, shadedMm };
 }
 
+/** Biomass by light use under the rows over that in open field; null without the crop's values. */
+function relativeBiomass(crop: RunCrop, sums: LightSums): number | null {
+  if (!crop.lightUse) return null;
+  const open: number[] = [];
+  const under: number[] = [];
+  for (let n = 0; n < crop.days; n += 1) {
+    const budget = periodBudget(sums, '', (crop.firstDay + n) % sums.days, 1);
+    open.push(budget.openDli);
+    under.push(budget.meanDli);
+  }
+  return seasonBiomass(crop.lightUse, open, under).relative;
+}
+
 /** Light, yield range and water of one crop between sowing and harvest. */
 export function cropBudget(state: RunState, crop: RunCrop): CropBudget {
   const planeIndex = state.planes.findIndex((plane) => plane.heightM === crop.canopyHeightM);
@@ -74,6 +88,7 @@ export function cropBudget(state: RunState, crop: RunCrop): CropBudget {
       note,
     })),
     yield: { ...yieldBand(crop.shadeClass, shade), shade },
+    relativeBiomass: relativeBiomass(crop, sums),
     et0OpenMm: water.openMm,
     et0ShadedMm: water.shadedMm,
   };

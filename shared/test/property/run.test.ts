@@ -182,6 +182,20 @@ describe('a run', () => {
   });
 });
 
+describe('a crop under rows', () => {
+  it('has a second opinion from light use close to its share of light', () => {
+    const [crop] = quick(OVERHEAD).crops;
+    const lightUse = { lightUseGPerMj: 3, extinction: 0.65, leafAreaMax: 4 };
+    const [plain] = runScenario(quick(OVERHEAD)).crops;
+    const [grown] = runScenario(quick(OVERHEAD, { crops: [{ ...crop, lightUse }] })).crops;
+    expect(plain.relativeBiomass).toBeNull();
+    const dim = Math.min(...runScenario(quick(OVERHEAD)).planes[0].months.map((m) => m.meanShare));
+    expect(grown.relativeBiomass).toBeGreaterThan(dim);
+    expect(grown.relativeBiomass).toBeLessThan(1);
+    expect(Math.abs((grown.relativeBiomass ?? 0) - grown.season.meanShare)).toBeLessThan(0.05);
+  });
+});
+
 describe('a crop-first programme', () => {
   const programme = (from: string, to: string): Layout => ({
     ...TRACKER,

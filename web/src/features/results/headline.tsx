@@ -47,6 +47,12 @@ function CropSentence({ crop }: { crop: CropBudget }) {
             {low !== null && high !== null ? `${percent(low)} to ${percent(high)}` : 'no number'}
           </dd>
         </div>
+        {crop.relativeBiomass != null && (
+          <div>
+            <dt>Second opinion: biomass by light use</dt>
+            <dd>{percent(crop.relativeBiomass)} of open field</dd>
+          </div>
+        )}
         {crop.et0OpenMm !== null && crop.et0ShadedMm !== null && (
           <div>
             <dt>Reference water use in the season</dt>
