@@ -64,6 +64,11 @@ export function Designer({ field, scenario, seasons, weather }: Props) {
     () => (field.boundary ? layRows(onMap, field.boundary.coordinates) : null),
     [onMap, field.boundary],
   );
+  const before = work.dirty ? (scenario?.layout ?? null) : null;
+  const saved = useMemo(
+    () => (before && field.boundary ? layRows(before, field.boundary.coordinates) : null),
+    [before, field.boundary],
+  );
   const utcOffsetHours = chosen?.utcOffsetHours ?? Math.round(field.pin[0] / 15);
   const slice = useRowSlice(site, shown, crop.canopyHeightM, {
     year: chosen?.summary.year ?? 2025,
@@ -154,7 +159,7 @@ export function Designer({ field, scenario, seasons, weather }: Props) {
       )}
       <div className={classes.split}>
         <div className={classes.views}>
-          <RowsMap field={field} laid={laid} />
+          <RowsMap field={field} laid={laid} saved={saved} />
           {laid?.empty && <p className={classes.problem}>{laid.empty}</p>}
           {!field.boundary && (
             <p className={classes.hint}>

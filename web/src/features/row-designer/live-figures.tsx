@@ -24,7 +24,7 @@ export function LiveFigures({ layout, laid }: { layout: Layout; laid: LaidRows |
           <Figure
             label="Rows"
             value={formatNumber(f.rowCount)}
-            note={`${formatNumber(f.rowLengthM)} m, ${formatNumber(f.posts)} posts`}
+            note={`${formatNumber(f.posts)} posts`}
           />
           <Figure
             label="Land lost"

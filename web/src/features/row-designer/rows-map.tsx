@@ -10,20 +10,23 @@ import classes from './designer.module.css';
 interface Props {
   field: Field;
   laid: LaidRows | null;
+  /** Rows as they were saved, shown faintly while others are tried; null when nothing changed. */
+  saved: LaidRows | null;
 }
 
+const outlinesOf = (laid: LaidRows | null) =>
+  (laid?.outlines ?? []).map((ring) => [ring.map(([lon, lat]): LatLngPair => [lat, lon])]);
+
 /** The rows as they lie over the boundary, redrawn as they change. */
-export function RowsMap({ field, laid }: Props) {
+export function RowsMap({ field, laid, saved }: Props) {
   const palette = usePalette();
   const bounds = useMemo(
     () => (field.boundary ? (boxOf(field.boundary.coordinates[0]) ?? undefined) : undefined),
     [field.boundary],
   );
   const rings = useMemo(() => (field.boundary ? ringsOf(field.boundary) : []), [field.boundary]);
-  const outlines = useMemo(
-    () => (laid?.outlines ?? []).map((ring) => [ring.map(([lon, lat]): LatLngPair => [lat, lon])]),
-    [laid],
-  );
+  const outlines = useMemo(() => outlinesOf(laid), [laid]);
+  const ghost = useMemo(() => outlinesOf(saved), [saved]);
   return (
     <BaseMap
       label={`Rows on ${field.name}`}
@@ -51,6 +54,11 @@ export function RowsMap({ field, laid }: Props) {
           pathOptions={{ color: palette.soil, weight: 5, opacity: 0.8 }}
         />
       ))}
+      <Polygon
+        positions={ghost}
+        interactive={false}
+        pathOptions={{ color: palette.soil, weight: 1.2, dashArray: '3 3', fill: false }}
+      />
       <Polygon
         positions={outlines}
         interactive={false}

@@ -51,6 +51,7 @@ export function SliderNumber(props: SliderNumberProps) {
         label={null}
         size="sm"
         className={classes.slider}
+        classNames={{ thumb: classes.thumb }}
       />
     </div>
   );
