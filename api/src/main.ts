@@ -1,6 +1,7 @@
 import 'reflect-metadata';
 import { createApp } from './app.js';
 import { ConfigError, loadConfig } from './config/app-config.js';
+import { CooperativesService } from './cooperatives/cooperatives.service.js';
 import { MigrationError } from './database/migrate.js';
 
 async function start(): Promise<void> {
@@ -8,6 +9,10 @@ async function start(): Promise<void> {
   const app = await createApp(config);
   await app.listen(config.port, config.host);
   process.stdout.write(`Furrowlight is at ${config.publicUrl}\n`);
+  const accounts = config.demo ? await app.get(CooperativesService).demoAccounts() : [];
+  for (const { role, email, password } of accounts) {
+    process.stdout.write(`  demo ${role}: ${email}, password ${password}\n`);
+  }
 }
 
 start().catch((error: unknown) => {
