@@ -25,9 +25,8 @@ if (!existsSync(path.join(dataDir, 'furrowlight.sqlite')) && env.DEMO !== 'false
 }
 // Without settings of its own the demo map can be switched to ground drawn on this machine, which
 // needs no network.
-let tiles = null;
 if (!env.TILE_LAYERS && env.DEMO !== 'false') {
-  tiles = await startTileServer(Number(env.PORT ?? 4180) + 1).catch(() => null);
+  const tiles = await startTileServer(Number(env.PORT ?? 4180) + 1).catch(() => null);
   if (tiles) {
     env.TILE_LAYERS = JSON.stringify([
       ONLINE_TILES,
