@@ -2,6 +2,7 @@ import { preparePreview, previewLayout } from '../src/run/preview.js';
 import { runScenario } from '../src/run/run-scenario.js';
 import { startCandidates } from './candidates.js';
 import { seasonOverField } from './field-map.js';
+import { fieldSeason } from './field.js';
 import { benchWeather, OVERHEAD, SITE, TRACKER, yearInput } from './inputs.js';
 import { prepareKernel } from './kernel.js';
 
@@ -68,6 +69,11 @@ function tasks(): { list: Task[]; close(): Promise<void> } {
       { name: 'calibration kernel', aimSeconds: null, run: () => void kernel() },
       year('year, endless rows, 10-minute suns, 100 positions', OVERHEAD, 0.25),
       year('the same with tracker', TRACKER, 1),
+      {
+        name: 'field map, 10,000 receivers, finite rows, a season by week',
+        aimSeconds: 3,
+        run: () => void fieldSeason(weather),
+      },
       preview('live preview, one season, 40 positions', OVERHEAD),
       preview('live preview with tracker', TRACKER),
       {
