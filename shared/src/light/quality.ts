@@ -72,6 +72,3 @@ export function testRadiation(sample: RadiationSample): QualityCode[] {
     codes.push('diffuse-above-global');
   return codes;
 }
-
-/** Daylight bounds of PPFD over global light, umol J-1 (ours, around Jacovides et al. 2004). */
-export const PPFD_PER_GLOBAL = { low: 1.6, high: 2.4 } as const;

@@ -31,6 +31,18 @@ describe('sun position', () => {
     expect(Math.abs(toDegrees(sun.azimuth) - azimuth)).toBeLessThan(0.03);
   });
 
+  it('gives sunrise, transit and sunset of the worked example of NREL SPA within 5 s', () => {
+    // Reda & Andreas 2004, NREL/TP-560-34302: 06:12:43 and 17:20:19, zone -7; transit 11:46:05. SPA
+    // works by UTC day, so its sunset of 17 October is the local evening of the 16th.
+    const near = (instant: number | null, published: number) =>
+      expect(Math.abs((instant ?? NaN) - published)).toBeLessThan(5000);
+    const day = sunTimes(Date.UTC(2003, 9, 17), 39.742476, -105.1786);
+    near(day.sunrise, Date.UTC(2003, 9, 17, 13, 12, 43));
+    near(day.transit, Date.UTC(2003, 9, 17, 18, 46, 5));
+    const dayBefore = sunTimes(Date.UTC(2003, 9, 16), 39.742476, -105.1786);
+    near(dayBefore.sunset, Date.UTC(2003, 9, 17, 0, 20, 19));
+  });
+
   it('has no sunrise in polar night and none missing at the equator', () => {
     expect(sunTimes(Date.UTC(2025, 11, 21), 75, 20).sunrise).toBeNull();
     const { sunrise, transit, sunset } = sunTimes(Date.UTC(2025, 2, 20), 0, 0);
