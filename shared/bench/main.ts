@@ -1,7 +1,6 @@
 import { preparePreview, previewLayout } from '../src/run/preview.js';
 import { runScenario } from '../src/run/run-scenario.js';
 import { startCandidates } from './candidates.js';
-import { seasonOverField } from './field-map.js';
 import { fieldSeason } from './field.js';
 import { benchWeather, OVERHEAD, SITE, TRACKER, yearInput } from './inputs.js';
 import { prepareKernel } from './kernel.js';
@@ -76,11 +75,6 @@ function tasks(): { list: Task[]; close(): Promise<void> } {
       },
       preview('live preview, one season, 40 positions', OVERHEAD),
       preview('live preview with tracker', TRACKER),
-      {
-        name: 'field map, 10,000 receivers, finite rows, a season by week, without reflections',
-        aimSeconds: 3,
-        run: () => void seasonOverField(),
-      },
       {
         name: '1,000 candidate layouts, a year each at half-hour suns and 40 positions, 2 threads',
         aimSeconds: 60,
