@@ -12,7 +12,7 @@ export interface Patches {
 }
 
 /** Most patches of a field; longer blocks are taken beyond. */
-const MOST_PATCHES = 8000;
+const MOST_PATCHES = 3000;
 const STRIPS = 10;
 const SHORTEST_BLOCK_M = 0.5;
 

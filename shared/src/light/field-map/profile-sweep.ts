@@ -1,9 +1,8 @@
 import { panelEndsAbove, planeFactor, upperSide } from '../rows/geometry.js';
 import { meetingHeight, type FiniteRows } from './finite-rows.js';
 
-/** Widest step of the profile angle between two panel edges, radians: for the sky alone, for panels. */
-const SKY_STEP = 2.5 * (Math.PI / 180);
-const PANEL_STEP = 1.25 * (Math.PI / 180);
+/** Widest step of the profile angle between two panel edges, radians. */
+const WIDEST_STEP = 2.5 * (Math.PI / 180);
 
 /** Light through panels weaker than this is left out. */
 const FAINTEST = 1e-4;
@@ -123,7 +122,6 @@ export function sweepView(
     };
   };
 
-  const widest = sink.panel ? PANEL_STEP : SKY_STEP;
   const sweepPart = (from: number, to: number, first: number, last: number): void => {
     if (first > last) {
       sink.sky((to - from) / 2);
@@ -131,7 +129,7 @@ export function sweepView(
     }
     const low = Math.asin(from);
     const high = Math.asin(to);
-    const steps = Math.ceil((high - low) / widest);
+    const steps = Math.ceil((high - low) / WIDEST_STEP);
     for (let step = 0; step < steps; step += 1) {
       const a = low + ((high - low) * step) / steps;
       const b = low + ((high - low) * (step + 1)) / steps;
