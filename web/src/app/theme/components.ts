@@ -4,6 +4,8 @@ import classes from './components.module.css';
 /** The look of Mantine's parts in paper and ink; one place, so that no page styles its own.
  * Plain objects: the parts themselves stay out of the first page's JavaScript. */
 export const components: MantineThemeComponents = {
+  ActionIcon: { classNames: { root: classes.onLeaf } },
+  Badge: { classNames: { root: classes.onLeaf } },
   Button: { classNames: { root: classes.button } },
   Input: { classNames: { input: classes.input } },
   InputWrapper: {

@@ -37,6 +37,10 @@ export function FieldsMap(props: Props) {
       ),
     [fields],
   );
+  const farmBox = useMemo(() => {
+    const own = fields.filter(({ farmId }) => farmId === props.farmId);
+    return boxOf(own.flatMap(({ boundary, pin }) => boundary?.coordinates[0] ?? [pin]));
+  }, [fields, props.farmId]);
   const incoming = useMemo(
     () => boxOf(importing.flatMap(({ boundary }) => boundary.coordinates[0])),
     [importing],
@@ -73,7 +77,7 @@ export function FieldsMap(props: Props) {
             }}
           />
         ))}
-      {!mode && props.farmId && !props.selectedId && <FitTo box={home} />}
+      {mode !== 'import' && !props.selectedId && <FitTo box={farmBox} />}
       {mode === 'import' && <FitTo box={incoming} />}
     </BaseMap>
   );

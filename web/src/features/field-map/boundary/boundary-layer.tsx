@@ -4,6 +4,7 @@ import { useEffect, useMemo, useState } from 'react';
 import { CircleMarker, Polygon, Polyline, useMap, useMapEvents } from 'react-leaflet';
 import { toPair } from '../../../map/lat-lng';
 import { usePalette } from '../../../map/use-palette';
+import classes from './boundary-layer.module.css';
 import { CornerHandles } from './corner-handles';
 import { crossingOf } from './measure';
 import { addCorner, openRing } from './shape';
@@ -95,7 +96,8 @@ function DrawTaps({ editor, snapTo }: Omit<Props, 'taps'>) {
   });
 
   const last = corners.at(-1);
-  if (!last || !pointer) return null;
+  if (!last) return <CloserHint />;
+  if (!pointer) return null;
   const lead = [toPair(last), [pointer.lat, pointer.lng] as [number, number]];
   return (
     <Polyline
@@ -103,5 +105,20 @@ function DrawTaps({ editor, snapTo }: Omit<Props, 'taps'>) {
       interactive={false}
       pathOptions={{ color: palette.ink, weight: 1.5, dashArray: '5 6' }}
     />
+  );
+}
+
+/** Below this zoom a finger's width is wider than most fields. */
+const DRAW_ZOOM = 13.5;
+
+function CloserHint() {
+  const map = useMap();
+  const [far, setFar] = useState(() => map.getZoom() < DRAW_ZOOM);
+  useMapEvents({ zoomend: () => setFar(map.getZoom() < DRAW_ZOOM) });
+  if (!far) return null;
+  return (
+    <div className={classes.closer} role="status">
+      Go closer first: single fields must be in sight.
+    </div>
   );
 }

@@ -124,6 +124,7 @@ export function SeasonForm({ fieldId, season, onDone }: Props) {
         label="Crop"
         placeholder="Type a name"
         searchable
+        comboboxProps={{ withinPortal: false }}
         data={groups}
         value={values.cropId}
         onChange={chooseCrop}
