@@ -1,6 +1,6 @@
 import type { Field } from '@furrowlight/shared/contract/fields';
 import L from 'leaflet';
-import { useEffect, useMemo, useState } from 'react';
+import { memo, useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { CircleMarker, Polygon, Tooltip, useMap, useMapEvents } from 'react-leaflet';
 import { boxOf, ringsOf, toPair } from '../../map/lat-lng';
 import { usePalette } from '../../map/use-palette';
@@ -34,54 +34,82 @@ function useDetail(fields: readonly Field[]): { labelled: ReadonlySet<string>; o
   return detail;
 }
 
-export function FieldsLayer({ fields, selectedId, onSelect, faint }: Props) {
-  const palette = usePalette();
+export function FieldsLayer({ fields, selectedId, onSelect, faint = false }: Props) {
   const { labelled, outlines } = useDetail(fields);
-  return fields.map((field) => {
-    const selected = field.id === selectedId;
-    const style: L.PathOptions = {
-      color: selected ? palette.ink : palette.leaf,
-      weight: selected ? 3 : 1.5,
-      fillColor: selected ? palette.straw : palette.leaf,
-      fillOpacity: faint ? 0.06 : selected ? 0.55 : 0.18,
-      opacity: faint ? 0.5 : 1,
+  const latest = useRef(onSelect);
+  useEffect(() => {
+    latest.current = onSelect;
+  });
+  const select = useCallback((id: string) => latest.current?.(id), []);
+  return fields.map((field) => (
+    <FieldShape
+      key={`${field.id}-${field.boundary && outlines ? 'outline' : 'dot'}`}
+      field={field}
+      selected={field.id === selectedId}
+      labelled={labelled.has(field.id)}
+      outline={outlines}
+      faint={faint}
+      onSelect={onSelect ? select : undefined}
+    />
+  ));
+}
 
-      interactive: Boolean(onSelect),
-    };
-    const events = onSelect ? { click: () => onSelect(field.id) } : {};
-    const label = (
-      <Tooltip
-        key={labelled.has(field.id) ? 'stay' : 'hover'}
-        permanent={labelled.has(field.id)}
-        direction="center"
-        className={classes.label}
-        interactive={false}
-      >
-        {field.name}
-      </Tooltip>
-    );
-    return field.boundary && outlines ? (
+interface ShapeProps {
+  field: Field;
+  selected: boolean;
+  labelled: boolean;
+  outline: boolean;
+  faint: boolean;
+  onSelect?: (id: string) => void;
+}
+
+/** One field; drawn anew only when something about it changes, so that hundreds stay fluid. */
+const FieldShape = memo(function FieldShape(props: ShapeProps) {
+  const { field, selected, labelled, outline, faint, onSelect } = props;
+  const palette = usePalette();
+  const pathOptions: L.PathOptions = {
+    color: selected ? palette.ink : palette.leaf,
+    weight: selected ? 3 : 1.5,
+    fillColor: selected ? palette.straw : palette.leaf,
+    fillOpacity: faint ? 0.06 : selected ? 0.55 : 0.18,
+    opacity: faint ? 0.5 : 1,
+    interactive: Boolean(onSelect),
+    dashArray: field.boundary ? undefined : '3 3',
+  };
+  const eventHandlers = onSelect ? { click: () => onSelect(field.id) } : {};
+  const label = (
+    <Tooltip
+      key={labelled ? 'stay' : 'hover'}
+      permanent={labelled}
+      direction="center"
+      className={classes.label}
+      interactive={false}
+    >
+      {field.name}
+    </Tooltip>
+  );
+  if (field.boundary && outline) {
+    return (
       <Polygon
-        key={field.id}
         positions={ringsOf(field.boundary)}
-        pathOptions={style}
-        eventHandlers={events}
+        pathOptions={pathOptions}
+        eventHandlers={eventHandlers}
       >
         {label}
       </Polygon>
-    ) : (
-      <CircleMarker
-        key={`${field.id}-dot`}
-        center={toPair(field.pin)}
-        radius={selected ? 9 : 6}
-        pathOptions={{ ...style, dashArray: field.boundary ? undefined : '3 3' }}
-        eventHandlers={events}
-      >
-        {label}
-      </CircleMarker>
     );
-  });
-}
+  }
+  return (
+    <CircleMarker
+      center={toPair(field.pin)}
+      radius={selected ? 9 : 6}
+      pathOptions={pathOptions}
+      eventHandlers={eventHandlers}
+    >
+      {label}
+    </CircleMarker>
+  );
+});
 
 /** Brings the chosen field into view, gently, when it is not already well in it. */
 export function FlyToSelected({ field }: { field: Field | undefined }) {
