@@ -1,22 +1,35 @@
 import { Global, Module } from '@nestjs/common';
-import { Clock } from '../common/clock.js';
-import { AppConfig } from '../config/app-config.js';
+import { getDataSourceToken, TypeOrmModule } from '@nestjs/typeorm';
+import type { DataSource } from 'typeorm';
 import { readerSource, writerSource } from './connection.js';
 import { Database } from './database.js';
-import { migrate } from './migrate.js';
+import { MigratedFile, MigrationModule } from './migration.module.js';
 
+const WRITER = 'writer';
+const READER = 'reader';
+
+/** Two connections to the migrated file: one that writes, one that can only read (decision 0003). */
 @Global()
 @Module({
+  imports: [
+    TypeOrmModule.forRootAsync({
+      name: WRITER,
+      imports: [MigrationModule],
+      inject: [MigratedFile],
+      useFactory: ({ path }: MigratedFile) => writerSource(path).options,
+    }),
+    TypeOrmModule.forRootAsync({
+      name: READER,
+      imports: [MigrationModule],
+      inject: [MigratedFile],
+      useFactory: ({ path }: MigratedFile) => readerSource(path).options,
+    }),
+  ],
   providers: [
     {
       provide: Database,
-      inject: [AppConfig, Clock],
-      useFactory: async (config: AppConfig, clock: Clock) => {
-        await migrate(config.databaseFile, clock.now());
-        const writer = await writerSource(config.databaseFile).initialize();
-        const reader = await readerSource(config.databaseFile).initialize();
-        return new Database(writer, reader);
-      },
+      inject: [getDataSourceToken(WRITER), getDataSourceToken(READER)],
+      useFactory: (writer: DataSource, reader: DataSource) => new Database(writer, reader),
     },
   ],
   exports: [Database],
