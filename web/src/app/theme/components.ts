@@ -44,5 +44,6 @@ export const components: MantineThemeComponents = {
   Table: { classNames: { th: classes.th, td: classes.td, tr: classes.tr } },
   Select: { defaultProps: { withScrollArea: false }, classNames: { options: classes.options } },
   Skeleton: { classNames: { root: classes.skeleton } },
+  Notifications: { classNames: { root: classes.notices } },
   Notification: { classNames: { root: classes.notification } },
 };
