@@ -39,6 +39,7 @@ export function LightLines({ lines, ticks, yLabel, label, nameOf, decimals = 1 }
       <div className={classes.frame} role="img" aria-label={label}>
         <ResponsiveLine
           data={data}
+          role="presentation"
           colors={lines.map(({ colour }) => colour)}
           margin={{ top: 16, right: 16, bottom: 36, left: 52 }}
           xScale={{ type: 'linear', min: 'auto', max: 'auto' }}

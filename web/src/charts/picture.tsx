@@ -50,7 +50,7 @@ export function Picture({ title, intro, table, csvHref, fileName, children }: Pr
               size="compact-sm"
               variant="default"
               leftSection={<IconDownload size={14} stroke={1.6} />}
-              aria-label={`${title} as CSV`}
+              aria-label={`CSV: ${title}`}
             >
               CSV
             </Button>
@@ -60,7 +60,7 @@ export function Picture({ title, intro, table, csvHref, fileName, children }: Pr
               size="compact-sm"
               variant="default"
               onClick={() => frame.current && void savePicture(frame.current, fileName)}
-              aria-label={`Save ${title} as a picture`}
+              aria-label={`Save picture: ${title}`}
             >
               Save picture
             </Button>

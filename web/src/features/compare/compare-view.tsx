@@ -24,7 +24,7 @@ export function CompareView({ compared, measure }: Props) {
         title="Daily light over the year"
         intro={measure === 'mean' ? 'Mean of the field.' : 'Mean of the darkest tenth.'}
         fileName="compared light"
-        table={<Ledger compared={compared} measure={measure} />}
+        table={<Ledger compared={compared} measure={measure} name="Daily light as a table" />}
       >
         <Lines compared={compared} measure={measure} />
       </Picture>
@@ -83,9 +83,9 @@ function Lines({ compared, measure }: Props) {
   );
 }
 
-function Ledger({ compared, measure }: Props) {
+function Ledger({ compared, measure, name = 'Differences' }: Props & { name?: string }) {
   return (
-    <div className={classes.scroll} tabIndex={0} role="region" aria-label="Ledger of differences">
+    <div className={classes.scroll} tabIndex={0} role="region" aria-label={name}>
       <Table className={classes.ledger}>
         <Table.Caption>
           {measure === 'mean' ? 'Mean of the field' : 'Darkest strip'}, mol m⁻² d⁻¹, modelled.
@@ -168,7 +168,7 @@ function Parameters({ compared }: { compared: readonly Compared[] }) {
     ...energy.map((row) => ({ ...row, differs: new Set(row.values).size > 1 })),
   ];
   return (
-    <div className={classes.scroll} tabIndex={0} role="region" aria-label="Layouts and energy">
+    <div className={classes.scroll} tabIndex={0} role="region" aria-label="Parameters">
       <Table className={classes.ledger}>
         <Table.Thead>
           <Table.Tr>

@@ -128,7 +128,7 @@ function Result({ field, scenario, stored }: ResultProps) {
             download
             size="compact-sm"
             variant="default"
-            aria-label="Season ledger as CSV"
+            aria-label="CSV: Season ledger"
           >
             CSV
           </Button>
