@@ -20,22 +20,44 @@ const forbid = (name, from, to, extra = {}) => ({
 });
 
 const rules = [
-  { name: 'no-circles', severity: 'error', from: {}, to: { circular: true, viaOnly: { dependencyTypesNot: ['type-only'] } } },
+  {
+    name: 'no-circles',
+    severity: 'error',
+    from: {},
+    to: { circular: true, viaOnly: { dependencyTypesNot: ['type-only'] } },
+  },
   forbid('shared stands alone', '^shared/src', '^(api|web)/'),
   forbid('web and api meet only in shared', '^web/', '^api/'),
   forbid('api does not know the web', '^api/', '^web/'),
-  forbid('the contract knows only types of the rest', '^shared/src/contract', '^shared/src/(?!contract)', {
-    dependencyTypesNot: ['type-only'],
-  }),
-  forbid('light is below power, crops and run', '^shared/src/light', '^shared/src/(power|run|rules)/'),
+  forbid(
+    'the contract knows only types of the rest',
+    '^shared/src/contract',
+    '^shared/src/(?!contract)',
+    {
+      dependencyTypesNot: ['type-only'],
+    },
+  ),
+  forbid(
+    'light is below power, crops and run',
+    '^shared/src/light',
+    '^shared/src/(power|run|rules)/',
+  ),
   forbid('angles are the ground floor', '^shared/src/light/angles', '^shared/src/'),
   forbid('nobody but the edges calls the conductor', '^shared/src/(?!run/)', '^shared/src/run/', {
     dependencyTypesNot: ['type-only'],
   }),
   ...folders('web/src/features').map((feature) =>
-    forbid(`feature ${feature} stands alone`, `^web/src/features/${feature}/`, `^web/src/features/(?!${feature}/)`),
+    forbid(
+      `feature ${feature} stands alone`,
+      `^web/src/features/${feature}/`,
+      `^web/src/features/(?!${feature}/)`,
+    ),
   ),
-  forbid('components and charts know no feature', '^web/src/(components|charts|lib|map|queries)/', '^web/src/features/'),
+  forbid(
+    'components and charts know no feature',
+    '^web/src/(components|charts|lib|map|queries)/',
+    '^web/src/features/',
+  ),
   ...folders('api/src')
     .filter((resource) => !['database', 'cli'].includes(resource))
     .map((resource) =>

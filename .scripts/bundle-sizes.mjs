@@ -23,7 +23,9 @@ function filesOf(key, seen = new Set()) {
 
 let failed = false;
 for (const { roots, what, limitKb } of BUDGETS) {
-  const files = new Set(roots.flatMap((key) => filesOf(key)).filter((file) => file.endsWith('.js')));
+  const files = new Set(
+    roots.flatMap((key) => filesOf(key)).filter((file) => file.endsWith('.js')),
+  );
   const bytes = [...files].reduce(
     (sum, file) => sum + gzipSync(readFileSync(path.join(dist, file))).length,
     0,
@@ -31,6 +33,8 @@ for (const { roots, what, limitKb } of BUDGETS) {
   const kb = bytes / 1000;
   const ok = kb <= limitKb;
   failed ||= !ok;
-  console.log(`${ok ? 'ok  ' : 'OVER'} ${what}: ${kb.toFixed(0)} kB gzip of ${limitKb} (${files.size} files)`);
+  console.log(
+    `${ok ? 'ok  ' : 'OVER'} ${what}: ${kb.toFixed(0)} kB gzip of ${limitKb} (${files.size} files)`,
+  );
 }
 process.exit(failed ? 1 : 0);

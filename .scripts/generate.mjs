@@ -6,7 +6,9 @@ import path from 'node:path';
 import { root } from './machine.mjs';
 
 const checking = process.argv.includes('--check');
-const reference = path.resolve(process.env.FURROWLIGHT_REFERENCE ?? path.join(root, '../shared/reference'));
+const reference = path.resolve(
+  process.env.FURROWLIGHT_REFERENCE ?? path.join(root, '../shared/reference'),
+);
 
 function output(args) {
   const result = spawnSync('node', args, { cwd: root, encoding: 'utf8', maxBuffer: 64e6 });
@@ -19,7 +21,10 @@ if (existsSync(reference)) {
   const validate = 'shared/dist-cli/validate/main.js';
   generated.push(
     { file: 'docs/validation.md', make: () => output([validate, reference, '--markdown']) },
-    { file: 'web/src/features/knowledge/validation.json', make: () => output([validate, reference, '--json']) },
+    {
+      file: 'web/src/features/knowledge/validation.json',
+      make: () => output([validate, reference, '--json']),
+    },
   );
 } else {
   console.log('validation page: no reference folder here, not compared');

@@ -20,7 +20,9 @@ export function requireTools() {
   }
   for (const tool of ['python3', 'make', 'g++']) {
     if (!has(tool)) {
-      missing.push(`${tool} is missing: it compiles the database driver (Debian: apt-get install ${tool}).`);
+      missing.push(
+        `${tool} is missing: it compiles the database driver (Debian: apt-get install ${tool}).`,
+      );
     }
   }
   if (missing.length > 0) {

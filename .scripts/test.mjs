@@ -33,7 +33,15 @@ function check(name, command, args) {
 /** A vitest suite, counted test by test. */
 function suite(name, workspace, config) {
   const report = path.join(scratch, `${name.replaceAll(' ', '-')}.json`);
-  const args = ['vitest', 'run', '--root', workspace, '--reporter=dot', '--reporter=json', `--outputFile.json=${report}`];
+  const args = [
+    'vitest',
+    'run',
+    '--root',
+    workspace,
+    '--reporter=dot',
+    '--reporter=json',
+    `--outputFile.json=${report}`,
+  ];
   if (config) args.push('--config', config);
   const status = step(name, 'npx', args);
   if (!existsSync(report)) {
@@ -41,7 +49,9 @@ function suite(name, workspace, config) {
     failures.push(`${name} (no report)`);
     return;
   }
-  const { numPassedTests, numFailedTests, numPendingTests } = JSON.parse(readFileSync(report, 'utf8'));
+  const { numPassedTests, numFailedTests, numPendingTests } = JSON.parse(
+    readFileSync(report, 'utf8'),
+  );
   totals.passed += numPassedTests;
   totals.failed += numFailedTests;
   totals.skipped += numPendingTests;
@@ -67,9 +77,21 @@ suite('web', 'web');
 suite('browser', 'web', 'e2e/vitest.config.ts');
 check('generated files are current', 'node', ['.scripts/generate.mjs', '--check']);
 
-const reference = path.resolve(process.env.FURROWLIGHT_REFERENCE ?? path.join(root, '../shared/reference'));
-if (existsSync(reference)) check('validation against reference data', 'npm', ['run', 'validate', '--silent', '--', reference]);
-else console.log(`\n== validation against reference data: not run, no folder ${path.relative(root, reference)}`);
+const reference = path.resolve(
+  process.env.FURROWLIGHT_REFERENCE ?? path.join(root, '../shared/reference'),
+);
+if (existsSync(reference))
+  check('validation against reference data', 'npm', [
+    'run',
+    'validate',
+    '--silent',
+    '--',
+    reference,
+  ]);
+else
+  console.log(
+    `\n== validation against reference data: not run, no folder ${path.relative(root, reference)}`,
+  );
 
 rmSync(scratch, { recursive: true, force: true });
 for (const failure of failures) console.log(`failed: ${failure}`);
