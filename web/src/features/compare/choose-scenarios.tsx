@@ -17,6 +17,7 @@ export function ChooseScenarios({ all, chosen, most, onChange }: Props) {
         return (
           <Chip
             key={id}
+            variant="outline"
             checked={checked}
             disabled={!checked && chosen.length >= most}
             onChange={() =>
